@@ -1,0 +1,12 @@
+import { customType } from "drizzle-orm/mysql-core";
+
+/** Ids and digests compare byte by byte, so "A" and "a" stay two things. */
+export const asciiText = customType<{ data: string; config: { length: number } }>({
+  dataType: (config) => `varchar(${config?.length ?? 64}) character set ascii collate ascii_bin`,
+});
+
+/** Prefixed id made in the application, e.g. `case_0j3k…`. */
+export const id = (name: string) => asciiText(name, { length: 40 });
+
+/** SHA-256 in lower-case hexadecimal. */
+export const sha256 = (name: string) => asciiText(name, { length: 64 });

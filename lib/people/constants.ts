@@ -1,0 +1,25 @@
+/** Roles a person can hold; exactly one each. */
+export const ROLES = ["requester", "technician", "investigator", "lead", "administrator"] as const;
+export type Role = (typeof ROLES)[number];
+
+export const ROLE_NAMES: Record<Role, string> = {
+  requester: "Requester",
+  technician: "Technician",
+  investigator: "Investigator",
+  lead: "Lead engineer",
+  administrator: "Administrator",
+};
+
+export const ORGANISATION_KINDS = ["laboratory", "client"] as const;
+export type OrganisationKind = (typeof ORGANISATION_KINDS)[number];
+
+/** Roles a client's people can hold; the others belong to the laboratory. */
+export const CLIENT_ROLES: readonly Role[] = ["requester"];
+
+export const TOKEN_KINDS = ["invitation", "password-reset"] as const;
+export type TokenKind = (typeof TOKEN_KINDS)[number];
+
+export const PASSWORD_MIN_LENGTH = 12;
+export const PASSWORD_MAX_LENGTH = 200;
+export const INVITATION_VALID_HOURS = 72;
+export const PASSWORD_RESET_VALID_HOURS = 2;
