@@ -1,0 +1,210 @@
+import { spawn } from "node:child_process";
+import {
+  closeSync,
+  openSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  statSync,
+  writeFileSync,
+} from "node:fs";
+import path from "node:path";
+import { identify, isSameProcessAlive } from "./process-identity.mjs";
+import { Failure, sayDetail, Stopped } from "./report.mjs";
+import { setTimeout as sleep } from "node:timers/promises";
+
+const GRACE_MS = 15_000;
+const OLD_LOG_BYTES = 5 * 1024 * 1024;
+
+/** The last lines of a log, for a message about why something ended. */
+export function tail(file, lines = 20) {
+  try {
+    return readFileSync(file, "utf8").trimEnd().split("\n").slice(-lines).join("\n");
+  } catch (error) {
+    if (error.code === "ENOENT") return "";
+    throw error;
+  }
+}
+
+function openLog(file) {
+  try {
+    if (statSync(file).size > OLD_LOG_BYTES) renameSync(file, `${file}.old`);
+  } catch (error) {
+    if (error.code !== "ENOENT") throw error;
+  }
+  return openSync(file, "a", 0o600);
+}
+
+function describeExit(code, signal) {
+  return signal ? `signal ${signal}` : `exit code ${code}`;
+}
+
+/**
+ * The processes that one command started: long-running ones and one-off tasks. Each gets its own
+ * process group, so that Ctrl-C reaches only the command, which then stops them in order; and each
+ * is told by the kernel to end when the command dies without having stopped it.
+ */
+export class Children {
+  #running = [];
+  #stopping = false;
+
+  /** Set once everything that was to be started is up. */
+  up = false;
+
+  /** Called with a Failure when a guarded process ends by itself. */
+  onCrash = () => undefined;
+
+  /** @param folder the state folder: `logs/` and `run/` lie in it */
+  constructor(folder) {
+    this.folder = folder;
+    this.register = path.join(folder, "run", "processes.json");
+  }
+
+  get stopping() {
+    return this.#stopping;
+  }
+
+  logFile(name) {
+    return path.join(this.folder, "logs", `${name}.log`);
+  }
+
+  #launch({ name, command, args, env, cwd, user, stdin = "ignore" }) {
+    if (this.#stopping) throw new Stopped();
+    const identity = user
+      ? ["--reuid", String(user.uid), "--regid", String(user.gid), "--clear-groups"]
+      : [];
+    const log = openLog(this.logFile(name));
+    const child = spawn("setpriv", ["--pdeathsig", "TERM", ...identity, "--", command, ...args], {
+      cwd,
+      env: { ...process.env, ...env },
+      detached: true,
+      stdio: [stdin, log, log],
+    });
+    closeSync(log);
+    const entry = { name, child, ended: undefined, exit: undefined, logFile: this.logFile(name) };
+    entry.ended = new Promise((resolve) => {
+      child.once("error", (error) => resolve({ text: error.message, code: undefined }));
+      child.once("exit", (code, signal) => resolve({ text: describeExit(code, signal), code }));
+    }).then((exit) => {
+      entry.exit = exit;
+      this.#running = this.#running.filter((other) => other !== entry);
+      return exit;
+    });
+    this.#running.push(entry);
+    this.#remember();
+    return entry;
+  }
+
+  /** Starts a process that is meant to run until the command stops it. */
+  start(options) {
+    return this.#launch(options);
+  }
+
+  /** From now on the end of this process is the end of the command. */
+  guard(entry, what) {
+    void entry.ended.then((exit) => {
+      if (this.#stopping) return;
+      sayDetail(tail(entry.logFile));
+      this.onCrash(
+        new Failure(
+          `${what} ended unexpectedly (${exit.text}).`,
+          `Its log is ${entry.logFile}. Start again; if it ends again, the log says why.`,
+          "Everything else is being stopped in order; saved data is kept.",
+        ),
+      );
+    });
+  }
+
+  /** Runs a task to its end. Its output goes to its log, and is shown when it fails. */
+  async run({ input, explain, ...options }) {
+    const entry = this.#launch({ ...options, stdin: input === undefined ? "ignore" : "pipe" });
+    if (input !== undefined) {
+      entry.child.stdin.on("error", (error) => {
+        // The task ended before it read everything; its exit code says why.
+        if (error.code !== "EPIPE") throw error;
+      });
+      entry.child.stdin.end(input);
+    }
+    const exit = await entry.ended;
+    if (this.#stopping) throw new Stopped();
+    if (exit.code === 0) return;
+    sayDetail(tail(entry.logFile, 30));
+    throw new Failure(
+      `${explain ?? options.name} failed (${exit.text}).`,
+      `The whole output is in ${entry.logFile}.`,
+    );
+  }
+
+  /** Waits until `ready` answers true; fails when the process ends first or time is up. */
+  async waitUntilReady(entry, ready, { seconds, what }) {
+    const deadline = Date.now() + seconds * 1000;
+    while (Date.now() < deadline) {
+      if (this.#stopping) throw new Stopped();
+      if (entry.exit) {
+        sayDetail(tail(entry.logFile));
+        throw new Failure(
+          `${what} ended while it was starting (${entry.exit.text}).`,
+          `Its log is ${entry.logFile}.`,
+        );
+      }
+      if (await ready()) return;
+      await sleep(100);
+    }
+    sayDetail(tail(entry.logFile));
+    throw new Failure(
+      `${what} did not become ready within ${seconds} s.`,
+      `Its log is ${entry.logFile}.`,
+    );
+  }
+
+  #remember() {
+    const list = this.#running.map(({ name, child }) => ({ name, ...identify(child.pid) }));
+    writeFileSync(this.register, JSON.stringify(list), { mode: 0o600 });
+  }
+
+  /** Stops everything, last started first, and waits until it is gone. */
+  async stopAll() {
+    this.#stopping = true;
+    for (const entry of [...this.#running].reverse()) {
+      signalGroup(entry.child.pid, "SIGTERM");
+      const timer = setTimeout(() => signalGroup(entry.child.pid, "SIGKILL"), GRACE_MS);
+      await entry.ended;
+      clearTimeout(timer);
+      // A grandchild that outlived its parent is still in the group.
+      signalGroup(entry.child.pid, "SIGKILL");
+    }
+    rmSync(this.register, { force: true });
+  }
+}
+
+function signalGroup(pid, signal) {
+  if (pid === undefined) return;
+  try {
+    process.kill(-pid, signal);
+  } catch (error) {
+    if (error.code !== "ESRCH") throw error;
+  }
+}
+
+/** Ends what an earlier start left behind when it was killed. Returns the names. */
+export async function endLeftOvers(folder) {
+  const register = path.join(folder, "run", "processes.json");
+  let list;
+  try {
+    list = JSON.parse(readFileSync(register, "utf8"));
+  } catch (error) {
+    if (error.code === "ENOENT" || error instanceof SyntaxError) return [];
+    throw error;
+  }
+  const alive = list.filter(isSameProcessAlive);
+  for (const identity of alive) {
+    signalGroup(identity.pid, "SIGTERM");
+    const deadline = Date.now() + GRACE_MS;
+    while (isSameProcessAlive(identity)) {
+      if (Date.now() > deadline) signalGroup(identity.pid, "SIGKILL");
+      await sleep(50);
+    }
+  }
+  rmSync(register, { force: true });
+  return alive.map(({ name }) => name);
+}
