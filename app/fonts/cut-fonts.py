@@ -16,7 +16,7 @@ from fontTools.varLib.instancer import instantiateVariableFont
 
 inter_ui, node_modules, out = sys.argv[1:4]
 
-SYMBOLS = "≈≤≥≠→←↑↓↔⇒√∞∅∑∂∫□✓−×÷·±½⅓°′″µ" + "₀₁₂₃₄₅₆₇₈₉₊₋" + "⁰¹²³⁴⁵⁶⁷⁸⁹⁺⁻"
+SYMBOLS = "≈≤≥≠→←↑↓↔⇒√∞∅∑∂∫□✓−×÷·±½⅓°′″µ" + "₀₁₂₃₄₅₆₇₈₉₊₋" + "⁰¹²³⁴⁵⁶⁷⁸⁹⁺⁻" + "\u2009\u202f"
 GREEK = "αβγδεθλμνπρστφωΔΩΣ"
 # Code points that Inter lacks but whose form it has under another: diameter sign, ballot box.
 SAME_FORM = {0x2300: 0x2205, 0x2610: 0x25A1}
