@@ -1,0 +1,3 @@
+export function radiansFromDegrees(angleDeg: number): number {
+  return (angleDeg * Math.PI) / 180;
+}
