@@ -253,6 +253,11 @@ export const OPEN_TO_ALL = "open" as const;
 export type Refusal = "role" | "relation" | "state" | "condition";
 export type Decision = { allowed: true } | { allowed: false; because: Refusal; says: string };
 
+/** Restricted cases are open to those named on them, and to these. */
+export function seesRestricted(actor: Actor): boolean {
+  return actor.role === "lead";
+}
+
 export function isAssigned(actor: Actor, subject: CaseSubject): boolean {
   return (
     subject.investigatorId === actor.id ||
@@ -276,7 +281,7 @@ function relates(actor: Actor, subject: CaseSubject, relation: Relation): boolea
     case "any":
       return (
         (subject.state !== "draft" || subject.requesterId === actor.id) &&
-        (!subject.isRestricted || isAssigned(actor, subject) || actor.role === "lead")
+        (!subject.isRestricted || isAssigned(actor, subject) || seesRestricted(actor))
       );
   }
 }

@@ -1,8 +1,7 @@
-import type { Action } from "@/lib/auth/policy";
 import { type CaseState, STAGE_OF_STATE, STAGES, type Stage, type StageNumber } from "./constants";
 
-/** One move of a case between states, and the action of the policy table that guards it. */
-export type Move = { from: readonly CaseState[]; to: CaseState; action: Action; verb: string };
+/** One move of a case between states; `action` names the rule of the policy table that guards it. */
+export type Move = { from: readonly CaseState[]; to: CaseState; action: string; verb: string };
 
 export const MOVES = {
   submit: {

@@ -1,0 +1,32 @@
+import "server-only";
+import { and, eq, ne, or, type SQL, sql } from "drizzle-orm";
+import { cases } from "@/db/schema";
+import type { Actor } from "@/lib/auth/actor";
+import { POLICY, type Relation, seesRestricted } from "@/lib/auth/policy";
+
+const assigned = (actor: Actor) =>
+  sql`(${cases.investigatorId} = ${actor.id} or ${cases.leadId} = ${actor.id}
+    or ${cases.secondReaderId} = ${actor.id} or ${cases.requesterId} = ${actor.id}
+    or exists (select 1 from case_technicians ct where ct.case_id = ${cases.id} and ct.person_id = ${actor.id}))`;
+
+/** The policy's "case.view" as a condition on rows, so that lists show what pages would open. */
+export function visibleCases(actor: Actor): SQL {
+  const roles: Partial<Record<string, Relation>> = POLICY["case.view"].roles;
+  const relation = roles[actor.role];
+  const own = eq(cases.requesterId, actor.id);
+  const sent = ne(cases.state, "draft");
+  switch (relation) {
+    case undefined:
+      return sql`false`;
+    case "own":
+      return own;
+    case "organisation":
+      return or(own, and(eq(cases.organisationId, actor.organisationId), sent)) ?? sql`false`;
+    case "assigned":
+      return assigned(actor);
+    case "any":
+      return seesRestricted(actor)
+        ? (or(own, sent) ?? sql`false`)
+        : (or(own, and(sent, or(eq(cases.isRestricted, false), assigned(actor)))) ?? sql`false`);
+  }
+}

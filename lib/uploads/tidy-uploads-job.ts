@@ -1,0 +1,8 @@
+import "server-only";
+import type { JobHandler } from "@/lib/jobs/handler";
+
+export const tidyUploadsJob: JobHandler = {
+  run() {
+    return Promise.reject(new Error("not built yet"));
+  },
+};
