@@ -35,6 +35,19 @@ function openLog(file) {
   return openSync(file, "a", 0o600);
 }
 
+function copyOutput(child, logFile) {
+  const log = createWriteStream(logFile, { flags: "a", mode: 0o600 });
+  // A log that cannot be written must not end the command: the output is on the screen as well.
+  log.on("error", (error) => sayDetail(`${logFile}: ${error.message}`));
+  for (const stream of [child.stdout, child.stderr]) {
+    stream.on("data", (chunk) => {
+      process.stdout.write(chunk);
+      log.write(chunk);
+    });
+  }
+  child.once("close", () => log.end());
+}
+
 function describeExit(code, signal) {
   return signal ? `signal ${signal}` : `exit code ${code}`;
 }
@@ -68,23 +81,28 @@ export class Children {
     return path.join(this.folder, "logs", `${name}.log`);
   }
 
-  #launch({ name, command, args, env, cwd, user, stdin = "ignore" }) {
+  #launch({ name, command, args, env, cwd, user, show = false }) {
     if (this.#stopping) throw new Stopped();
     const identity = user
       ? ["--reuid", String(user.uid), "--regid", String(user.gid), "--clear-groups"]
       : [];
-    const log = openLog(this.logFile(name));
+    const logFile = this.logFile(name);
+    const log = openLog(logFile);
+    const out = show ? "pipe" : log;
     const child = spawn("setpriv", ["--pdeathsig", "TERM", ...identity, "--", command, ...args], {
       cwd,
       env: { ...process.env, ...env },
       detached: true,
-      stdio: [stdin, log, log],
+      stdio: ["ignore", out, out],
     });
     closeSync(log);
-    const entry = { name, child, ended: undefined, exit: undefined, logFile: this.logFile(name) };
+    if (show) copyOutput(child, logFile);
+    const entry = { name, child, ended: undefined, exit: undefined, logFile };
     entry.ended = new Promise((resolve) => {
       child.once("error", (error) => resolve({ text: error.message, code: undefined }));
-      child.once("exit", (code, signal) => resolve({ text: describeExit(code, signal), code }));
+      child.once(show ? "close" : "exit", (code, signal) =>
+        resolve({ text: describeExit(code, signal), code }),
+      );
     }).then((exit) => {
       entry.exit = exit;
       this.#running = this.#running.filter((other) => other !== entry);
@@ -115,23 +133,22 @@ export class Children {
     });
   }
 
-  /** Runs a task to its end. Its output goes to its log, and is shown when it fails. */
-  async run({ input, explain, ...options }) {
-    const entry = this.#launch({ ...options, stdin: input === undefined ? "ignore" : "pipe" });
-    if (input !== undefined) {
-      entry.child.stdin.on("error", (error) => {
-        // The task ended before it read everything; its exit code says why.
-        if (error.code !== "EPIPE") throw error;
-      });
-      entry.child.stdin.end(input);
-    }
-    const exit = await entry.ended;
+  /** Runs a task to its end and answers how it ended. With `show` its output is also printed. */
+  async exitOf(options) {
+    const exit = await this.#launch(options).ended;
     if (this.#stopping) throw new Stopped();
+    return exit;
+  }
+
+  /** Runs a task that must succeed. Its output goes to its log, and is shown when it fails. */
+  async run({ explain, ...options }) {
+    const exit = await this.exitOf(options);
     if (exit.code === 0) return;
-    sayDetail(tail(entry.logFile, 30));
+    const logFile = this.logFile(options.name);
+    if (!options.show) sayDetail(tail(logFile, 30));
     throw new Failure(
       `${explain ?? options.name} failed (${exit.text}).`,
-      `The whole output is in ${entry.logFile}.`,
+      `The whole output is in ${logFile}.`,
     );
   }
 

@@ -39,6 +39,13 @@ export async function startLocalStore({ root, folder, ports, settings, children 
     what: "The object store",
   });
   children.guard(entry, "The object store");
+  await children.run({
+    name: "store-bucket",
+    ...projectScript("scripts/prepare-store.ts"),
+    cwd: root,
+    env: settings,
+    explain: "Making the bucket in the object store",
+  });
 }
 
 /** The mail sink that stands in for a mail relay; its messages are read at a local page. */
