@@ -1,6 +1,7 @@
 "use client";
 
 import { useCallback, useEffect, useRef, useState } from "react";
+import { routes } from "@/lib/routes";
 
 export interface SessionTimes {
   /** Without use for this long: the warning. */
@@ -19,10 +20,10 @@ const USES = ["pointerdown", "keydown", "wheel", "touchstart"] as const;
 
 /** Asks for the session, which prolongs it. True while there is one; throws without an answer. */
 async function renewSession(): Promise<boolean> {
-  const answer = await fetch("/api/auth/session", { cache: "no-store" });
+  const answer = await fetch(routes.api.session(), { cache: "no-store" });
+  if (answer.status === 401) return false;
   if (!answer.ok) throw new Error(`The session was not renewed: status ${answer.status}`);
-  const session: unknown = await answer.json();
-  return typeof session === "object" && session !== null && "user" in session;
+  return true;
 }
 
 /** Follows use of the page, renews the session while there is use, and says when it nears its end.
