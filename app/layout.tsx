@@ -15,7 +15,7 @@ export const dynamic = "force-dynamic";
 export default async function RootLayout({ children }: { children: React.ReactNode }) {
   const nonce = (await headers()).get("x-nonce") ?? "";
   return (
-    <html lang="en" suppressHydrationWarning>
+    <html lang="en" data-theme="auto" suppressHydrationWarning>
       <body>
         <Theme nonce={nonce}>{children}</Theme>
       </body>

@@ -42,7 +42,7 @@ export function FormErrorSummary({
       className="rounded-3 border border-l-[3px] border-rule-2 border-l-bad-mark bg-bad-tint px-3 py-2 text-13"
     >
       <p className="flex items-center gap-2 font-strong">
-        <Shape name="triangle" className="text-bad" />
+        <Shape name="triangle" className="shrink-0 text-bad" />
         {title ?? `Not sent yet: ${count} a change. What you typed is kept.`}
       </p>
       <ul className="mt-1 ml-6 list-disc">

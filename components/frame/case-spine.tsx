@@ -46,9 +46,12 @@ function SpineLink({ node, isCurrent }: { node: OpenNode; isCurrent: boolean }) 
       <span className="flex flex-col max-lg:pointer-events-none max-lg:absolute max-lg:left-full max-lg:z-30 max-lg:ml-1 max-lg:rounded-3 max-lg:bg-surface max-lg:px-2.5 max-lg:py-1.5 max-lg:opacity-0 max-lg:shadow-lift-2 max-lg:group-hover:opacity-100 max-lg:group-focus-visible:opacity-100">
         <span className="flex justify-between gap-2 whitespace-nowrap">
           {node.label}
-          <span className="sr-only">, {PART_STATE_NAMES[node.state]}</span>
+          <span className="sr-only">, {PART_STATE_NAMES[node.state]}, </span>
           {node.count === null || node.count === undefined ? null : (
-            <span className="tn text-13 font-normal text-ink-2">{node.count}</span>
+            <span className="tn text-13 font-normal text-ink-2">
+              {node.count}
+              <span className="sr-only">, </span>
+            </span>
           )}
         </span>
         {node.note ? (

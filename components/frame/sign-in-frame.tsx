@@ -32,7 +32,7 @@ export function SignInFrame({
             <RiverLines className="absolute right-0 h-full w-[max(54.5rem,calc(88vw-24.5rem))]" />
           </div>
           <span className="absolute top-61 -left-2 z-10 size-4 -translate-y-1/2 rounded-full border-2 border-bench bg-action max-md:hidden" />
-          <div className="relative min-h-105 rounded-4 border border-rule-2 bg-surface px-8 pt-8 pb-6 max-md:min-h-0 max-md:px-5">
+          <div className="relative min-h-105 rounded-4 border border-rule-2 bg-surface px-8 [--control-h:2.5rem] pointer-coarse:[--control-h:2.75rem] pt-8 pb-6 max-md:min-h-0 max-md:px-5">
             <h1 className="mb-1 text-24 font-head tracking-[-0.018em]">{title}</h1>
             {note ? <p className="mb-6 text-ink-2">{note}</p> : null}
             {children}

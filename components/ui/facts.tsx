@@ -11,11 +11,11 @@ export interface Fact {
 /** Ruled list of name and value. */
 export function Facts({ facts, className }: { facts: readonly Fact[]; className?: string }) {
   return (
-    <dl className={classNames("text-13", className)}>
+    <dl className={classNames("grid grid-cols-[auto_minmax(0,1fr)] gap-x-4 text-13", className)}>
       {facts.map(({ name, value, mono }) => (
         <div
           key={name}
-          className="grid grid-cols-[minmax(5rem,2fr)_minmax(0,5fr)] gap-4 border-b border-rule py-[5px] last:border-b-0"
+          className="col-span-2 grid grid-cols-subgrid border-b border-rule py-[5px] last:border-b-0"
         >
           <dt className="text-ink-3">{name}</dt>
           <dd className={classNames("min-w-0 break-words", mono && "font-mono")}>{value}</dd>

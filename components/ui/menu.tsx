@@ -8,7 +8,7 @@ import { Kbd } from "@/components/ui/kbd";
 import { Shape } from "@/components/ui/shapes";
 
 const ITEM =
-  "flex min-h-[30px] w-full cursor-default items-center gap-3 rounded-2 px-2.5 text-13 text-ink no-underline outline-none select-none data-highlighted:bg-action-tint data-disabled:text-ink-3 pointer-coarse:min-h-touch";
+  "flex min-h-[30px] w-full cursor-default items-center gap-3 rounded-2 px-2.5 text-13 no-underline outline-none select-none data-highlighted:bg-action-tint data-disabled:text-ink-3 pointer-coarse:min-h-touch";
 
 export function Menu({
   trigger,
@@ -49,7 +49,7 @@ export function MenuItem({ children, keys, danger, disabledReason, onSelect }: M
     <BaseMenu.Item
       disabled={Boolean(disabledReason)}
       onClick={onSelect}
-      className={classNames(ITEM, danger && !disabledReason && "text-bad")}
+      className={classNames(ITEM, danger ? "text-bad" : "text-ink")}
     >
       <span>
         {children}
@@ -66,7 +66,11 @@ export function MenuItem({ children, keys, danger, disabledReason, onSelect }: M
 
 export function MenuLink({ href, children }: { href: string; children: ReactNode }) {
   return (
-    <BaseMenu.LinkItem closeOnClick render={<Link href={href} />} className={ITEM}>
+    <BaseMenu.LinkItem
+      closeOnClick
+      render={<Link href={href} />}
+      className={classNames(ITEM, "text-ink")}
+    >
       {children}
     </BaseMenu.LinkItem>
   );
@@ -98,7 +102,11 @@ export function MenuChoices({
         onValueChange={(chosen: unknown) => onValueChange(String(chosen))}
       >
         {choices.map((choice) => (
-          <BaseMenu.RadioItem key={choice.value} value={choice.value} className={ITEM}>
+          <BaseMenu.RadioItem
+            key={choice.value}
+            value={choice.value}
+            className={classNames(ITEM, "text-ink")}
+          >
             {choice.label}
             <BaseMenu.RadioItemIndicator className="ml-auto">
               <Shape name="tick" size={14} />

@@ -11,7 +11,7 @@ export function RiverLines({ className }: { className?: string }) {
       className={className}
       fill="none"
       stroke="var(--ink)"
-      strokeOpacity=".2"
+      opacity=".2"
       strokeLinecap="round"
     >
       {RIVER_LINES.map(({ width, strands }) => (
