@@ -23,3 +23,6 @@ export const PASSWORD_MIN_LENGTH = 12;
 export const PASSWORD_MAX_LENGTH = 200;
 export const INVITATION_VALID_HOURS = 72;
 export const PASSWORD_RESET_VALID_HOURS = 2;
+
+/** Role of the person who sets an empty installation up. */
+export const FIRST_ROLE: Role = "administrator";
