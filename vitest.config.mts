@@ -22,7 +22,7 @@ export default defineConfig({
         test: {
           name: "pure",
           environment: "node",
-          include: ["tests/{unit,reference,architecture}/**/*.test.ts"],
+          include: ["tests/{unit,reference,architecture,scripts}/**/*.test.ts"],
         },
       },
       {
@@ -40,6 +40,18 @@ export default defineConfig({
           environment: "node",
           include: ["tests/{services,routes,storage}/**/*.test.ts"],
           setupFiles: ["tests/setup/services.ts"],
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: "journeys",
+          environment: "node",
+          include: ["tests/journeys/**/*.test.ts"],
+          testTimeout: 120_000,
+          hookTimeout: 120_000,
+          // One browser at a time: the journeys share one portal and its two cores.
+          fileParallelism: false,
         },
       },
     ],

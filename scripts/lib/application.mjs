@@ -1,15 +1,13 @@
-import { existsSync } from "node:fs";
 import { setTimeout as sleep } from "node:timers/promises";
 import { projectScript } from "./project-script.mjs";
-import { Failure, formatDuration, say, sayDetail } from "./report.mjs";
+import { Failure, formatDuration, say } from "./report.mjs";
 import { forgetBuild, isBuilt, rememberBuild, sourceStamp } from "./source-stamp.mjs";
 import path from "node:path";
 
 const NEXT = "node_modules/next/dist/bin/next";
 
 /** Runs a TypeScript task of the project to its end. */
-export async function runScript({ name, file, args, explain, root, settings, children }) {
-  if (!existsSync(path.join(root, file))) return sayDetail(`${file} is not there yet`);
+export function runScript({ name, file, args, explain, root, settings, children }) {
   return children.run({
     name,
     ...projectScript(file, args),
@@ -53,7 +51,7 @@ export async function startWeb({ root, settings, webPort, children, mode, distFo
     try {
       const answer = await fetch(health, { signal: AbortSignal.timeout(30_000) });
       last = `${answer.status} ${(await answer.text()).slice(0, 300)}`;
-      return answer.status === 200 || (mode === "dev" && answer.status === 404);
+      return answer.status === 200;
     } catch (error) {
       last = `no answer (${error.cause?.code ?? error.name})`;
       return false;
@@ -74,10 +72,6 @@ const STEADY_MS = 10 * 60_000;
 /** Starts the worker for background jobs, and again when it crashes; a crash loses no job. */
 export function superviseWorker({ root, settings, children }) {
   let crashes = 0;
-  if (!existsSync(path.join(root, "scripts/worker.ts"))) {
-    sayDetail("scripts/worker.ts is not there yet");
-    return;
-  }
   const launch = () => {
     const begun = Date.now();
     const entry = children.start({

@@ -1,6 +1,7 @@
 import { spawn } from "node:child_process";
 import {
   closeSync,
+  createWriteStream,
   openSync,
   readFileSync,
   renameSync,

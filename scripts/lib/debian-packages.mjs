@@ -11,6 +11,7 @@ const PACKAGE_OF = {
   useradd: "passwd",
   chromium: "chromium",
   pdfinfo: "poppler-utils",
+  pdftotext: "poppler-utils",
   identify: "imagemagick",
   exiftool: "libimage-exiftool-perl",
   vips: "libvips-tools",

@@ -1,4 +1,3 @@
-import { existsSync } from "node:fs";
 import path from "node:path";
 import { databaseUser, ensureAccount, ensureDataFolder, startDatabase } from "./mariadb.mjs";
 import { answersOn } from "./ports.mjs";
@@ -50,7 +49,6 @@ export async function startLocalStore({ root, folder, ports, settings, children 
 
 /** The mail sink that stands in for a mail relay; its messages are read at a local page. */
 export async function startLocalMail({ root, folder, ports, settings, children }) {
-  if (!existsSync(path.join(root, "storage-fake/mail-sink/main.ts"))) return;
   const args = ["--folder", path.join(folder, "mail")];
   args.push("--smtp-port", String(ports.smtp), "--http-port", String(ports.mailPage));
   const entry = children.start({

@@ -26,8 +26,10 @@ export async function supervisedRun({ folder, root, work, whenStopped = () => un
     code = explain(error, [folder, root]);
   }
   await children.stopAll();
-  whenStopped();
-  process.exit(code);
+  whenStopped(code);
+  process.exitCode = code;
+  // Whatever still waits (a timer of a step that was cut short) must not hold the command up.
+  process.stdout.write("", () => process.exit(code));
 }
 
 function listenForSignals(children) {
