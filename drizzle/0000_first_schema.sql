@@ -117,6 +117,7 @@ CREATE TABLE `cases` (
 	`lead_id` varchar(40) character set ascii collate ascii_bin,
 	`second_reader_id` varchar(40) character set ascii collate ascii_bin,
 	`due_on` date,
+	`due_key` int GENERATED ALWAYS AS ((case when stage between 1 and 5 then 0 when stage = 6 then 2 else 3 end) * 1000000 + coalesce(to_days(due_on), 999999)) STORED,
 	`impartiality_statement` text,
 	`end_reason` text,
 	`is_on_hold` boolean NOT NULL DEFAULT false,
@@ -500,14 +501,14 @@ CREATE INDEX `case_holds_by_case` ON `case_holds` (`case_id`,`cleared_at`);--> s
 CREATE INDEX `case_moves_by_case` ON `case_moves` (`case_id`,`at`);--> statement-breakpoint
 CREATE INDEX `case_questions_by_case` ON `case_questions` (`case_id`,`asked_at`);--> statement-breakpoint
 CREATE INDEX `case_technicians_by_person` ON `case_technicians` (`person_id`);--> statement-breakpoint
-CREATE INDEX `cases_by_due` ON `cases` (`due_on`,`id`);--> statement-breakpoint
+CREATE INDEX `cases_by_due` ON `cases` (`due_key`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_changed` ON `cases` (`changed_at`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_number` ON `cases` (`number`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_stage` ON `cases` (`stage`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_title` ON `cases` (`title`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_organisation_changed` ON `cases` (`organisation_id`,`changed_at`,`id`);--> statement-breakpoint
-CREATE INDEX `cases_by_organisation_due` ON `cases` (`organisation_id`,`due_on`,`id`);--> statement-breakpoint
-CREATE INDEX `cases_by_investigator_due` ON `cases` (`investigator_id`,`due_on`,`id`);--> statement-breakpoint
+CREATE INDEX `cases_by_organisation_due` ON `cases` (`organisation_id`,`due_key`,`id`);--> statement-breakpoint
+CREATE INDEX `cases_by_investigator_due` ON `cases` (`investigator_id`,`due_key`,`id`);--> statement-breakpoint
 CREATE INDEX `cases_by_requester` ON `cases` (`requester_id`,`state`);--> statement-breakpoint
 CREATE INDEX `cases_by_drawing` ON `cases` (`drawing_number`,`id`);--> statement-breakpoint
 CREATE INDEX `record_edges_by_input` ON `record_edges` (`input_version_id`);--> statement-breakpoint

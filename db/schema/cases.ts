@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import {
   boolean,
   date,
@@ -43,6 +44,12 @@ export const cases = mysqlTable(
     secondReaderId: id("second_reader_id").references(() => people.id),
     /** Calendar day at the laboratory; null until a date is set. */
     dueOn: date("due_on", { mode: "string" }),
+    /** Orders the list by due date: open cases first, then signed, then ended; no date comes last. */
+    dueKey: int("due_key")
+      .generatedAlwaysAs(
+        sql`(case when stage between 1 and 5 then 0 when stage = 6 then 2 else 3 end) * 1000000 + coalesce(to_days(due_on), 999999)`,
+        { mode: "stored" },
+      ),
     /** Statement of the accepting lead that nobody assigned owns design, process or supplier. */
     impartialityStatement: text("impartiality_statement"),
     /** Reason given when declined, cancelled or reopened; null otherwise. */
@@ -62,14 +69,14 @@ export const cases = mysqlTable(
   },
   (t) => [
     // The case list sorts by one of these and pages by (column, id).
-    index("cases_by_due").on(t.dueOn, t.id),
+    index("cases_by_due").on(t.dueKey, t.id),
     index("cases_by_changed").on(t.changedAt, t.id),
     index("cases_by_number").on(t.number, t.id),
     index("cases_by_stage").on(t.stage, t.id),
     index("cases_by_title").on(t.title, t.id),
     index("cases_by_organisation_changed").on(t.organisationId, t.changedAt, t.id),
-    index("cases_by_organisation_due").on(t.organisationId, t.dueOn, t.id),
-    index("cases_by_investigator_due").on(t.investigatorId, t.dueOn, t.id),
+    index("cases_by_organisation_due").on(t.organisationId, t.dueKey, t.id),
+    index("cases_by_investigator_due").on(t.investigatorId, t.dueKey, t.id),
     index("cases_by_requester").on(t.requesterId, t.state),
     index("cases_by_drawing").on(t.drawingNumber, t.id),
   ],
