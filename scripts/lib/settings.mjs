@@ -28,6 +28,8 @@ export function effectiveSettings({ given, external, secrets, ports, webPort }) 
   return {
     NODE_ENV: "production",
     NEXT_TELEMETRY_DISABLED: "1",
+    // Versions are pinned; the notice about Node 20 would stand in every log.
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true",
     NEXTAUTH_URL: `http://127.0.0.1:${webPort}`,
     NEXTAUTH_SECRET: secrets.nextAuthSecret,
     RIVERLINE_DEMO: external.database ? "0" : "1",

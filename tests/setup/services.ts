@@ -10,9 +10,12 @@ const slot = await takeSlot();
 process.env.DATABASE_URL = slot.databaseUrl;
 process.env.S3_BUCKET = slot.bucket;
 
-const { env } = await import("@/lib/env");
-const { objectStore } = await import("@/lib/storage/s3");
-await objectStore().prepare(new URL(env().NEXTAUTH_URL).origin);
+if (slot.isNew) {
+  const { env } = await import("@/lib/env");
+  const { objectStore } = await import("@/lib/storage/s3");
+  await objectStore().prepare(new URL(env().NEXTAUTH_URL).origin);
+  await slot.remember();
+}
 
 afterAll(async () => {
   const { closeDatabase } = await import("@/db/client");

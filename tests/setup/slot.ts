@@ -6,6 +6,10 @@ const MARKER = "_test_schema";
 
 export interface Slot {
   databaseUrl: string;
+  /** The schema was made just now, and the bucket is still to be made. */
+  isNew: boolean;
+  /** Lets the next file use what was made here. */
+  remember(): Promise<void>;
   bucket: string;
   release(): Promise<void>;
 }
@@ -28,20 +32,18 @@ export async function takeSlot(): Promise<Slot> {
   const connection = await mysql.createConnection({ uri: serverUrl(), multipleStatements: true });
   const schema = await claim(connection);
   const databaseUrl = `${serverUrl()}/${schema}`;
-  if ((await schemaHash(connection, schema)) === migrationsHash()) {
-    await emptyTables(connection, schema);
-  } else {
+  const isNew = (await schemaHash(connection, schema)) !== migrationsHash();
+  if (isNew) {
     await connection.query(`drop database if exists \`${schema}\`; create database \`${schema}\``);
     await migrate(databaseUrl);
-    await connection.query(
-      `create table \`${schema}\`.${MARKER} (hash char(64) not null);
-       insert into \`${schema}\`.${MARKER} values (?)`,
-      [migrationsHash()],
-    );
+  } else {
+    await emptyTables(connection, schema);
   }
   return {
     databaseUrl,
     bucket: schema.replaceAll("_", "-"),
+    isNew,
+    remember: () => writeMarker(connection, schema),
     release: () => connection.end(),
   };
 }
@@ -55,6 +57,14 @@ async function claim(connection: mysql.Connection): Promise<string> {
     if (rows[0]?.got === 1) return schema;
   }
   throw new Error(`All ${SLOTS} test schemas are in use.`);
+}
+
+async function writeMarker(connection: mysql.Connection, schema: string): Promise<void> {
+  await connection.query(
+    `create table \`${schema}\`.${MARKER} (hash char(64) not null);
+     insert into \`${schema}\`.${MARKER} values (?)`,
+    [migrationsHash()],
+  );
 }
 
 async function schemaHash(connection: mysql.Connection, schema: string) {
