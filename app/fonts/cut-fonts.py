@@ -48,6 +48,15 @@ def add_copy(font, missing, present):
             table.cmap[missing] = name
 
 
+def list_lookups_once(font):
+    """Inter lists its kerning lookups twice for the default script; pdfkit then kerns twice."""
+    for tag in ("GSUB", "GPOS"):
+        if tag in font:
+            for record in font[tag].table.FeatureList.FeatureRecord:
+                record.Feature.LookupListIndex = sorted(set(record.Feature.LookupListIndex))
+                record.Feature.LookupCount = len(record.Feature.LookupListIndex)
+
+
 def cut(font, codes):
     for missing, present in SAME_FORM.items():
         add_copy(font, missing, present)
@@ -60,6 +69,7 @@ def cut(font, codes):
     subsetter = Subsetter(options)
     subsetter.populate(unicodes=codes)
     subsetter.subset(font)
+    list_lookups_once(font)
     return font
 
 
