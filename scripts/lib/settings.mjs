@@ -2,7 +2,12 @@ import { existsSync, readFileSync } from "node:fs";
 import path from "node:path";
 import { parseEnv } from "node:util";
 
-/** Variables of `.env` in the checkout, under those that are really set. Empty counts as not set. */
+/**
+ * Variables of `.env` in the checkout, under those that are really set. Empty counts as not set.
+ * @param {string} root
+ * @param {Record<string, string | undefined>} environment
+ * @returns {Record<string, string>}
+ */
 export function givenSettings(root, environment = process.env) {
   const file = path.join(root, ".env");
   const fromFile = existsSync(file) ? parseEnv(readFileSync(file, "utf8")) : {};
