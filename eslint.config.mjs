@@ -16,5 +16,5 @@ export default defineConfig([
       "no-empty": ["error", { allowEmptyCatch: false }],
     },
   },
-  globalIgnores([".next/**", ".riverline/**", "node_modules/**", "next-env.d.ts", "drizzle/**"]),
+  globalIgnores([".next/**", ".next-test/**", ".riverline/**", "node_modules/**", "next-env.d.ts", "drizzle/**"]),
 ]);

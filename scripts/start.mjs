@@ -106,9 +106,16 @@ function neededCommands() {
 }
 
 async function startServices(context) {
-  if (!external.database) await step("Starting MariaDB", () => startLocalDatabase(context));
-  if (!external.store) await step("Starting the object store", () => startLocalStore(context));
-  if (!external.mail) await step("Starting the mail sink", () => startLocalMail(context));
+  const services = [
+    [external.database, "MariaDB", startLocalDatabase],
+    [external.store, "the object store", startLocalStore],
+    [external.mail, "the mail sink", startLocalMail],
+  ].filter(([elsewhere]) => !elsewhere);
+  if (services.length === 0) return;
+  const names = services.map(([, name]) => name).join(", ");
+  await step(`Starting ${names}`, () =>
+    Promise.all(services.map(([, , startService]) => startService(context))),
+  );
 }
 
 async function prepareDatabase(context) {

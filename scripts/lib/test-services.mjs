@@ -57,11 +57,13 @@ export async function startTestServices(folder, children) {
     TEST_BASE_URL: `http://127.0.0.1:${webPort}`,
   };
   const context = { root, folder, secrets, ports, settings, children, options: FAST };
-  const data = await startLocalDatabase(context);
+  const [data] = await Promise.all([
+    startLocalDatabase(context),
+    startLocalStore(context),
+    startLocalMail(context),
+  ]);
   // Each test worker makes a schema of its own.
   administer(data, "grant all on `riverline\\_test\\_%`.* to 'riverline'@'127.0.0.1'");
-  await startLocalStore(context);
-  await startLocalMail(context);
   writePrivateJson(environmentFile(folder), settings);
   return { settings, webPort };
 }
