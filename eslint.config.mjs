@@ -10,11 +10,24 @@ export default defineConfig([
     languageOptions: { parserOptions: { projectService: true } },
     rules: {
       "@typescript-eslint/no-floating-promises": "error",
-      "@typescript-eslint/no-misused-promises": ["error", { checksVoidReturn: { attributes: false } }],
+      "@typescript-eslint/no-misused-promises": [
+        "error",
+        { checksVoidReturn: { attributes: false } },
+      ],
       "@typescript-eslint/no-explicit-any": "error",
-      "@typescript-eslint/no-unused-vars": ["error", { argsIgnorePattern: "^_", varsIgnorePattern: "^_" }],
+      "@typescript-eslint/no-unused-vars": [
+        "error",
+        { argsIgnorePattern: "^_", varsIgnorePattern: "^_" },
+      ],
       "no-empty": ["error", { allowEmptyCatch: false }],
     },
   },
-  globalIgnores([".next/**", ".next-test/**", ".riverline/**", "node_modules/**", "next-env.d.ts", "drizzle/**"]),
+  globalIgnores([
+    ".next/**",
+    ".next-test/**",
+    ".riverline/**",
+    "node_modules/**",
+    "next-env.d.ts",
+    "drizzle/**",
+  ]),
 ]);
