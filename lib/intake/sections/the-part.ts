@@ -1,0 +1,81 @@
+import type { SectionDefinition } from "../field-types";
+
+export const THE_PART = {
+  key: "part",
+  title: "The part",
+  note: "As marked and as drawn",
+  groups: [
+    {
+      title: null,
+      fields: [
+        { key: "partName", kind: "text", need: "must", label: "Part", columns: 6 },
+        {
+          key: "drawingNumber",
+          kind: "text",
+          need: "must",
+          label: "Drawing number",
+          mono: true,
+          most: 100,
+          columns: 3,
+        },
+        {
+          key: "drawingRevision",
+          kind: "text",
+          need: "must",
+          label: "Revision",
+          mono: true,
+          columns: 3,
+        },
+        {
+          key: "serialNumber",
+          kind: "text",
+          need: "must",
+          label: "Serial or lot",
+          mono: true,
+          most: 100,
+          columns: 3,
+        },
+        {
+          key: "heatNumber",
+          kind: "text",
+          need: "must",
+          label: "Heat",
+          mono: true,
+          most: 100,
+          columns: 3,
+        },
+        { key: "maker", kind: "text", need: "must", label: "Made by", columns: 3 },
+        { key: "madeWhen", kind: "text", need: "must", label: "Made when", columns: 3 },
+        {
+          key: "positionInAssembly",
+          kind: "text",
+          need: "must",
+          label: "Where it sits in the assembly",
+          columns: 12,
+        },
+        {
+          key: "quantityFailed",
+          kind: "count",
+          need: "must",
+          label: "How many failed",
+          columns: 4,
+        },
+        {
+          key: "quantityInstalled",
+          kind: "count",
+          need: "must",
+          label: "How many are in service",
+          help: "The failed ones included.",
+          columns: 4,
+        },
+        {
+          key: "quantitySound",
+          kind: "count",
+          need: "must",
+          label: "Looked at and found sound",
+          columns: 4,
+        },
+      ],
+    },
+  ],
+} as const satisfies SectionDefinition;
