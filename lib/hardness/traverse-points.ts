@@ -1,4 +1,5 @@
 import { groupBy } from "../numerics/group-by";
+import { mean } from "../numerics/statistics";
 import {
   answer,
   isPositive,
@@ -93,10 +94,17 @@ export function byTrack<Point extends TraversePoint>(
   return groupBy(points, (point) => point.track);
 }
 
+/** The readings of all tracks at each depth. */
+export function atEachDepth<Point extends TraversePoint>(
+  points: readonly Point[],
+): readonly (readonly [number, readonly Point[]])[] {
+  return [...groupBy(points, (point) => point.depthMm)];
+}
+
 /** One reading at each depth, the mean of the tracks; only for those who ask for it. */
 export function trackMeans(points: readonly TraversePoint[]): readonly TraversePoint[] {
-  return [...groupBy(points, (point) => point.depthMm)].map(([depthMm, group]) => ({
+  return atEachDepth(points).map(([depthMm, group]) => ({
     depthMm,
-    hardness: group.reduce((sum, point) => sum + point.hardness, 0) / group.length,
+    hardness: mean(group.map((point) => point.hardness)),
   }));
 }
