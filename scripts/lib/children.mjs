@@ -8,6 +8,7 @@ import {
   rmSync,
   statSync,
   writeFileSync,
+  writeSync,
 } from "node:fs";
 import path from "node:path";
 import { identify, isSameProcessAlive } from "./process-identity.mjs";
@@ -17,10 +18,17 @@ import { setTimeout as sleep } from "node:timers/promises";
 const GRACE_MS = 15_000;
 const OLD_LOG_BYTES = 5 * 1024 * 1024;
 
-/** The last lines of a log, for a message about why something ended. */
-export function tail(file, lines = 20) {
+const STARTED = "--- started ";
+
+/** The last lines of a log since its process was started, for a message about why it ended. */
+export function tail(file, lines = 12) {
   try {
-    return readFileSync(file, "utf8").trimEnd().split("\n").slice(-lines).join("\n");
+    const all = readFileSync(file, "utf8").trimEnd().split("\n");
+    const begun = all.findLastIndex((line) => line.startsWith(STARTED));
+    return all
+      .slice(begun + 1)
+      .slice(-lines)
+      .join("\n");
   } catch (error) {
     if (error.code === "ENOENT") return "";
     throw error;
@@ -33,7 +41,9 @@ function openLog(file) {
   } catch (error) {
     if (error.code !== "ENOENT") throw error;
   }
-  return openSync(file, "a", 0o600);
+  const log = openSync(file, "a", 0o600);
+  writeSync(log, `${STARTED}${new Date().toISOString()}\n`);
+  return log;
 }
 
 function copyOutput(child, logFile) {
