@@ -16,6 +16,22 @@ export type OrganisationKind = (typeof ORGANISATION_KINDS)[number];
 /** Roles a client's people can hold; the others belong to the laboratory. */
 export const CLIENT_ROLES: readonly Role[] = ["requester"];
 
+/** Seats of a case and the roles that can take them. */
+export const SEATS = ["lead", "investigator", "secondReader", "technician"] as const;
+export type Seat = (typeof SEATS)[number];
+export const SEAT_ROLES: Record<Seat, readonly Role[]> = {
+  lead: ["lead"],
+  investigator: ["investigator", "lead"],
+  secondReader: ["investigator", "lead"],
+  technician: ["technician"],
+};
+export const SEAT_NAMES: Record<Seat, string> = {
+  lead: "Lead engineer",
+  investigator: "Investigator",
+  secondReader: "Second reader",
+  technician: "Technician",
+};
+
 export const TOKEN_KINDS = ["invitation", "password-reset"] as const;
 export type TokenKind = (typeof TOKEN_KINDS)[number];
 
