@@ -310,6 +310,12 @@ export function decide(actor: Actor, action: Action, subject?: CaseSubject): Dec
     : { allowed: false, because: "condition", says: condition };
 }
 
+/** Whether this person's role does this at all, to some case in some state. */
+export function roleMay(actor: Actor, action: Action): boolean {
+  const rule: Rule = POLICY[action];
+  return rule.roles[actor.role] !== undefined;
+}
+
 const ROLE_IN_SENTENCE: Record<Role, string> = {
   requester: "the requester",
   technician: "a technician",

@@ -105,3 +105,6 @@ export const HOLD_NAMES: Record<HoldKind, string> = {
   restricted: "Restricted to named people",
   suspect_integrity: "Integrity of the evidence in question",
 };
+
+/** Rows of the gate ledger. */
+export const GATE_COUNT = 8;
