@@ -5,9 +5,9 @@
 import { existsSync } from "node:fs";
 import path from "node:path";
 import { ensureBuild, runScript, startWeb, superviseWorker } from "./lib/application.mjs";
-import { endLeftOvers } from "./lib/children.mjs";
 import { ensureCommands } from "./lib/debian-packages.mjs";
 import { sayDemoAccounts } from "./lib/demo-accounts.mjs";
+import { endLeftOvers } from "./lib/left-overs.mjs";
 import { startLocalDatabase, startLocalMail, startLocalStore } from "./lib/local-services.mjs";
 import { takeLock } from "./lib/lock-file.mjs";
 import { checkNodeVersion, ensureNodePackages } from "./lib/node-packages.mjs";

@@ -8,8 +8,8 @@
  */
 import path from "node:path";
 import { ensureBuild, runScript, startWeb, superviseWorker } from "./lib/application.mjs";
-import { endLeftOvers } from "./lib/children.mjs";
 import { ensureCommands } from "./lib/debian-packages.mjs";
+import { endLeftOvers } from "./lib/left-overs.mjs";
 import { takeLock } from "./lib/lock-file.mjs";
 import { checkNodeVersion, ensureNodePackages } from "./lib/node-packages.mjs";
 import { Failure, formatDuration, say, sayBold, sayDetail, Stopped, step } from "./lib/report.mjs";

@@ -5,13 +5,11 @@ import {
   openSync,
   readFileSync,
   renameSync,
-  rmSync,
   statSync,
-  writeFileSync,
   writeSync,
 } from "node:fs";
 import path from "node:path";
-import { identify, isSameProcessAlive } from "./process-identity.mjs";
+import { originMarks } from "./left-overs.mjs";
 import { Failure, sayDetail, Stopped } from "./report.mjs";
 import { setTimeout as sleep } from "node:timers/promises";
 
@@ -78,10 +76,9 @@ export class Children {
   /** Called with a Failure when a guarded process ends by itself. */
   onCrash = () => undefined;
 
-  /** @param folder the state folder: `logs/` and `run/` lie in it */
+  /** @param folder the state folder; `logs/` lies in it */
   constructor(folder) {
     this.folder = folder;
-    this.register = path.join(folder, "run", "processes.json");
   }
 
   get stopping() {
@@ -102,7 +99,7 @@ export class Children {
     const out = show ? "pipe" : log;
     const child = spawn("setpriv", ["--pdeathsig", "TERM", ...identity, "--", command, ...args], {
       cwd,
-      env: { ...process.env, ...env },
+      env: { ...process.env, ...env, ...originMarks(this.folder, name) },
       detached: true,
       stdio: ["ignore", out, out],
     });
@@ -120,7 +117,6 @@ export class Children {
       return exit;
     });
     this.#running.push(entry);
-    this.#remember();
     return entry;
   }
 
@@ -185,11 +181,6 @@ export class Children {
     );
   }
 
-  #remember() {
-    const list = this.#running.map(({ name, child }) => ({ name, ...identify(child.pid) }));
-    writeFileSync(this.register, JSON.stringify(list), { mode: 0o600 });
-  }
-
   /** Stops everything, last started first, and waits until it is gone. */
   async stopAll() {
     this.#stopping = true;
@@ -201,7 +192,6 @@ export class Children {
       // A grandchild that outlived its parent is still in the group.
       signalGroup(entry.child.pid, "SIGKILL");
     }
-    rmSync(this.register, { force: true });
   }
 }
 
@@ -212,27 +202,4 @@ function signalGroup(pid, signal) {
   } catch (error) {
     if (error.code !== "ESRCH") throw error;
   }
-}
-
-/** Ends what an earlier start left behind when it was killed. Returns the names. */
-export async function endLeftOvers(folder) {
-  const register = path.join(folder, "run", "processes.json");
-  let list;
-  try {
-    list = JSON.parse(readFileSync(register, "utf8"));
-  } catch (error) {
-    if (error.code === "ENOENT" || error instanceof SyntaxError) return [];
-    throw error;
-  }
-  const alive = list.filter(isSameProcessAlive);
-  for (const identity of alive) {
-    signalGroup(identity.pid, "SIGTERM");
-    const deadline = Date.now() + GRACE_MS;
-    while (isSameProcessAlive(identity)) {
-      if (Date.now() > deadline) signalGroup(identity.pid, "SIGKILL");
-      await sleep(50);
-    }
-  }
-  rmSync(register, { force: true });
-  return alive.map(({ name }) => name);
 }

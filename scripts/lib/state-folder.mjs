@@ -29,9 +29,7 @@ export function prepareStateFolder(folder) {
     }
     // A folder that lets the database's group pass (mode 0710) is left so: it may be in use.
     if ((stat.mode & 0o067) !== 0) chmodSync(folder, 0o700);
-    for (const name of ["logs", "run"]) {
-      mkdirSync(path.join(folder, name), { recursive: true, mode: 0o700 });
-    }
+    mkdirSync(path.join(folder, "logs"), { recursive: true, mode: 0o700 });
   } catch (error) {
     if (error instanceof Failure) throw error;
     throw new Failure(

@@ -56,7 +56,7 @@ export async function runCheck({ name, parts, children, counts, env = {} }) {
 export async function runTests({ name, projects, filters = [], env, children, counts }) {
   sayBold(`\n== ${name}`);
   const begun = performance.now();
-  const countsFile = path.join(children.folder, "run", `${name.replaceAll(" ", "-")}-counts.json`);
+  const countsFile = path.join(children.folder, `${name.replaceAll(" ", "-")}-counts.json`);
   rmSync(countsFile, { force: true });
   const exit = await children.exitOf({
     name: `tests-${name.replaceAll(" ", "-")}`,
