@@ -1,0 +1,106 @@
+import { Panel, PanelBody, PanelHead } from "@/components/ui/panel";
+import { type CaseState } from "@/lib/cases/constants";
+import { stagePeriods } from "@/lib/cases/stage-periods";
+import { formatDate, formatDay } from "@/lib/format/dates";
+
+type Props = {
+  moves: { to: CaseState; at: string }[];
+  dueOn: string | null;
+  lead: string | null;
+  now: Date;
+};
+
+const WIDTH = 724;
+const INSET = 14;
+const LABEL_MIN = 84;
+
+/** The stages a case went through, each as wide as the days it took, with today and the due date. */
+export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
+  const periods = stagePeriods(moves, now);
+  const first = periods[0];
+  if (!first) return null;
+  const due = dueOn === null ? null : Date.parse(`${dueOn}T12:00:00Z`);
+  const start = Date.parse(first.from);
+  const end = Math.max(now.getTime(), due ?? 0, start + 86_400_000);
+  const x = (time: number) => INSET + ((time - start) / (end - start)) * (WIDTH - 2 * INSET);
+  const days = Math.round((now.getTime() - start) / 86_400_000);
+  const words = [
+    ...periods.map((period) => `${period.stage} from ${formatDay(period.from)}`),
+    ...(dueOn ? [`due ${formatDate(dueOn)}`] : []),
+  ].join(", ");
+  let labelEnd = -1;
+  return (
+    <Panel>
+      <PanelHead
+        title="Progress"
+        note={`${days} ${days === 1 ? "day" : "days"} in`}
+        actions={lead ? <span className="text-ink-2">Lead {lead}</span> : null}
+      />
+      <PanelBody>
+        <svg viewBox={`0 0 ${WIDTH} 78`} className="w-full" role="img" aria-label={words}>
+          {periods.map((period) => (
+            <rect
+              key={period.from}
+              x={x(Date.parse(period.from))}
+              y={34}
+              width={Math.max(2, x(Date.parse(period.to)) - x(Date.parse(period.from)))}
+              height={14}
+              fill={`var(--temper-${period.step})`}
+              stroke={`var(--temper-${period.step}-edge)`}
+            />
+          ))}
+          {due !== null && due > now.getTime() && (
+            <rect
+              x={x(now.getTime())}
+              y={34.5}
+              width={x(due) - x(now.getTime())}
+              height={13}
+              fill="none"
+              stroke="var(--rule-2)"
+              strokeDasharray="3 3"
+            />
+          )}
+          <g fontSize={12} fill="var(--ink-2)">
+            {periods.map((period) => {
+              const at = x(Date.parse(period.from));
+              if (at < labelEnd) return null;
+              labelEnd = at + LABEL_MIN;
+              return (
+                <text key={period.from} x={Math.min(at, WIDTH - LABEL_MIN)} y={66}>
+                  {period.stage} {formatDay(period.from)}
+                </text>
+              );
+            })}
+          </g>
+          <path d={`M${x(now.getTime())} 14V56`} stroke="var(--ink)" strokeWidth={1.5} />
+          <text
+            x={Math.min(x(now.getTime()) + 6, WIDTH - 44)}
+            y={24}
+            fontSize={12}
+            fontWeight={550}
+            fill="var(--ink)"
+          >
+            Today
+          </text>
+          {due !== null && (
+            <>
+              <path d={`M${x(due)} 14V56`} stroke="var(--ink)" strokeWidth={1.5} />
+              {Math.abs(x(due) - x(now.getTime())) > 110 && (
+                <text
+                  x={x(due) - 6}
+                  y={24}
+                  textAnchor="end"
+                  fontSize={12}
+                  fontWeight={550}
+                  fill="var(--ink)"
+                >
+                  Due {formatDay(dueOn ?? "")}
+                </text>
+              )}
+            </>
+          )}
+        </svg>
+      </PanelBody>
+    </Panel>
+  );
+}
