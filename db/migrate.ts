@@ -1,6 +1,6 @@
 import path from "node:path";
 import { sql } from "drizzle-orm";
-import { migrate } from "drizzle-orm/mysql2/migrator";
+import { applyMigrations } from "./apply-migrations";
 import { closeDatabase, database } from "./client";
 
 /** Brings the database to the newest schema; several instances may try at once, one does it. */
@@ -9,7 +9,7 @@ export async function migrateDatabase(): Promise<void> {
   await db.transaction(async (tx) => {
     await tx.execute(sql`select get_lock('riverline-migrate', 120)`);
     try {
-      await migrate(db, { migrationsFolder: path.join(process.cwd(), "drizzle") });
+      await applyMigrations(db, path.join(process.cwd(), "drizzle"));
     } finally {
       await tx.execute(sql`select release_lock('riverline-migrate')`);
     }
