@@ -189,7 +189,9 @@ function evaluateTrack(
     warnings: [
       ...warnings,
       ...depth.warnings,
-      ...(kind === "CHD" ? coreWarnings(input, points, depth.depthMm) : []),
+      ...(kind === "CHD" && input.method === "vickers"
+        ? coreWarnings(input, points, depth.depthMm)
+        : []),
     ],
   };
 }
