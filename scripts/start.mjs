@@ -81,7 +81,12 @@ async function start(children) {
   const context = { root, folder, secrets, ports, settings, webPort, children };
 
   await step("Checking the settings", () =>
-    runScript({ ...context, name: "settings", file: "scripts/check-env.ts", explain: "The check" }),
+    runScript({
+      ...context,
+      name: "settings",
+      file: "scripts/check-env.ts",
+      explain: "The check of the settings",
+    }),
   );
   writePrivateJson(path.join(folder, "environment.json"), settings);
   await startServices(context);
