@@ -33,11 +33,13 @@ export async function supervisedRun({ folder, root, work, whenStopped = () => un
 }
 
 function listenForSignals(children) {
+  let stopping = false;
   return new Promise((resolve) => {
     for (const signal of SIGNALS) {
       // Stays installed: npm passes Ctrl-C on a second time, and the stop must not be cut short.
       process.on(signal, () => {
-        say(`\nStopping (${signal}) ...`);
+        if (!stopping) say(`\nStopping everything (${signal}) ...`);
+        stopping = true;
         // Stopping a server that was up is its normal end; stopping a start is not.
         resolve(children.up ? 0 : 128 + SIGNAL_NUMBER[signal]);
       });
