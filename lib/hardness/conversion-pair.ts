@@ -2,22 +2,26 @@ import { lastAtOrBelow } from "../numerics/bisect";
 import type { HardnessTable, MarkedRows } from "./hardness-table";
 import type { Scale } from "./scales";
 
-/** Two columns of one table made ready for reading: rows where both are filled, ascending. */
-export interface ConversionPair {
-  readonly from: readonly number[];
-  readonly to: readonly number[];
-  /** For each row: its place in the table, to notice rows that were skipped. */
-  readonly rowIndex: readonly number[];
-  readonly parenthesised: readonly boolean[];
-  readonly unconfirmed: readonly boolean[];
-}
-
-export interface PairReading {
-  readonly value: number;
+/** What a value takes over from the one row it meets, or the two it lies between. */
+export interface PairMarks {
   /** The two rows do not stand next to one another in the table: a cell between them is empty. */
   readonly overEmptyCell: boolean;
   readonly parenthesised: boolean;
   readonly unconfirmed: boolean;
+}
+
+/** Two columns of one table made ready for reading: rows where both are filled, ascending. */
+export interface ConversionPair {
+  readonly from: readonly number[];
+  readonly to: readonly number[];
+  readonly onRow: readonly PairMarks[];
+  /** Between a row and the next. */
+  readonly afterRow: readonly PairMarks[];
+}
+
+export interface PairReading {
+  readonly value: number;
+  readonly marks: PairMarks;
 }
 
 function isMarked(marks: MarkedRows, scales: readonly Scale[], key: number | null): boolean {
@@ -44,9 +48,19 @@ function buildPair(table: HardnessTable, from: Scale, to: Scale): ConversionPair
   return {
     from: rows.map((row) => row.fromValue),
     to: rows.map((row) => row.toValue),
-    rowIndex: rows.map((row) => row.rowIndex),
-    parenthesised: rows.map((row) => row.parenthesised),
-    unconfirmed: rows.map((row) => row.unconfirmed),
+    onRow: rows.map(({ parenthesised, unconfirmed }) => ({
+      overEmptyCell: false,
+      parenthesised,
+      unconfirmed,
+    })),
+    afterRow: rows.slice(1).map((high, index) => {
+      const low = rows[index] ?? high;
+      return {
+        overEmptyCell: Math.abs(high.rowIndex - low.rowIndex) > 1,
+        parenthesised: low.parenthesised || high.parenthesised,
+        unconfirmed: low.unconfirmed || high.unconfirmed,
+      };
+    }),
   };
 }
 
@@ -73,21 +87,13 @@ export function readPair(pair: ConversionPair, value: number): PairReading | nul
   const lower = lastAtOrBelow(pair.from, value);
   const fromLow = pair.from[lower];
   const toLow = pair.to[lower];
-  if (fromLow === undefined || toLow === undefined) return null;
-  const marks = (row: number) => ({
-    parenthesised: pair.parenthesised[row] === true,
-    unconfirmed: pair.unconfirmed[row] === true,
-  });
-  if (fromLow === value) return { value: toLow, overEmptyCell: false, ...marks(lower) };
+  const onRow = pair.onRow[lower];
+  if (fromLow === undefined || toLow === undefined || !onRow) return null;
+  if (fromLow === value) return { value: toLow, marks: onRow };
   const fromHigh = pair.from[lower + 1];
   const toHigh = pair.to[lower + 1];
-  if (fromHigh === undefined || toHigh === undefined) return null;
-  const low = marks(lower);
-  const high = marks(lower + 1);
-  return {
-    value: toLow + ((toHigh - toLow) * (value - fromLow)) / (fromHigh - fromLow),
-    overEmptyCell: Math.abs((pair.rowIndex[lower + 1] ?? 0) - (pair.rowIndex[lower] ?? 0)) > 1,
-    parenthesised: low.parenthesised || high.parenthesised,
-    unconfirmed: low.unconfirmed || high.unconfirmed,
-  };
+  const between = pair.afterRow[lower];
+  if (fromHigh === undefined || toHigh === undefined || !between) return null;
+  const part = (value - fromLow) / (fromHigh - fromLow);
+  return { value: toLow + (toHigh - toLow) * part, marks: between };
 }

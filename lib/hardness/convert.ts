@@ -1,22 +1,15 @@
-import type { Notice } from "../numerics/verdict";
 import {
   conversionPair,
   pairRange,
   readPair,
   type ConversionPair,
-  type PairReading,
+  type PairMarks,
 } from "./conversion-pair";
+import { rowWarnings, withScaleLimits, type ConversionWarning } from "./conversion-warnings";
 import { editionText, type HardnessTable } from "./hardness-table";
 import { MATERIAL_GROUPS, type MaterialGroup } from "./material-groups";
 import { getTable, tablesInOrder, type TableId } from "./published-tables";
-import { SCALES, scaleLimitWarning, type Scale } from "./scales";
-
-export type ConversionWarningCode =
-  | "printed_in_parentheses"
-  | "unconfirmed"
-  | "interpolated_over_empty_cell"
-  | "outside_scale_limits"
-  | "cold_worked_override";
+import { SCALES, type Scale } from "./scales";
 
 export type ConversionRefusalCode =
   | "already_converted"
@@ -36,7 +29,7 @@ export type Conversion =
       readonly value: number;
       readonly table: TableId;
       readonly edition: string;
-      readonly warnings: readonly Notice<ConversionWarningCode>[];
+      readonly warnings: readonly ConversionWarning[];
     }
   | {
       readonly to: Scale;
@@ -66,6 +59,7 @@ interface Candidate {
   readonly table: HardnessTable;
   readonly edition: string;
   readonly pair: ConversionPair;
+  readonly warningsOf: (marks: PairMarks) => readonly ConversionWarning[];
 }
 
 /** Groups whose tables a person may use for cold-worked steel by override. */
@@ -118,41 +112,15 @@ function candidatesOf(rule: ConversionRule): readonly Candidate[] {
   return ids.flatMap((id) => {
     const table = getTable(id);
     const pair = conversionPair(table, rule.from, rule.to);
-    return pair ? [{ id, table, edition: editionText(table), pair }] : [];
+    if (!pair) return [];
+    const known = new Map<PairMarks, readonly ConversionWarning[]>();
+    const warningsOf = (marks: PairMarks) => {
+      const warnings = known.get(marks) ?? rowWarnings(rule.materialGroup, table, marks);
+      known.set(marks, warnings);
+      return warnings;
+    };
+    return [{ id, table, edition: editionText(table), pair, warningsOf }];
   });
-}
-
-function warningsFor(
-  rule: ConversionRule,
-  table: HardnessTable,
-  value: number,
-  reading: PairReading,
-): readonly Notice<ConversionWarningCode>[] {
-  const warnings: Notice<ConversionWarningCode>[] = [];
-  const warn = (code: ConversionWarningCode, text: string) => warnings.push({ code, text });
-  if (reading.parenthesised)
-    warn(
-      "printed_in_parentheses",
-      "Printed in parentheses in the table: outside the usual range of that test, for information only.",
-    );
-  if (reading.unconfirmed)
-    warn("unconfirmed", `Not confirmed against a copy of ${table.standard}.`);
-  if (reading.overEmptyCell)
-    warn(
-      "interpolated_over_empty_cell",
-      "A cell of the table is empty here: interpolated between the nearest filled rows.",
-    );
-  const limits = [
-    scaleLimitWarning(rule.from, value),
-    scaleLimitWarning(rule.to, reading.value),
-  ].filter((text) => text !== null);
-  for (const text of limits) warn("outside_scale_limits", text);
-  if (rule.materialGroup === "steel-cold-worked")
-    warn(
-      "cold_worked_override",
-      "Cold-worked steel can lie far from this table; used by override.",
-    );
-  return warnings;
 }
 
 /** A table of the neighbouring steel group that would answer, offered but never used unasked. */
@@ -212,10 +180,10 @@ export function converterFor(rule: ConversionRule): Converter {
     if (always) return always;
     if (!Number.isFinite(value)) return refused(to, "not_a_number", "The value is not a number.");
     if (!first) return missingPair(rule, all);
-    for (const { id, table, edition, pair } of candidates) {
+    for (const { id, edition, pair, warningsOf } of candidates) {
       const reading = readPair(pair, value);
       if (!reading) continue;
-      const warnings = warningsFor(rule, table, value, reading);
+      const warnings = withScaleLimits(rule, value, reading.value, warningsOf(reading.marks));
       return { to, status: "ok", value: reading.value, table: id, edition, warnings };
     }
     return outsideRange(rule, first, value);
