@@ -25,3 +25,9 @@ export const WeighMechanismInput = z.object({
   seenVersion: z.number().int().nullable(),
   content: mechanismContent,
 });
+
+export const WithdrawMechanismInput = z.object({
+  caseId: z.string(),
+  recordId: z.string(),
+  reason: z.string().trim().min(1, "Say why.").max(500),
+});

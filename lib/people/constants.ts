@@ -42,3 +42,6 @@ export const PASSWORD_RESET_VALID_HOURS = 2;
 
 /** Role of the person who sets an empty installation up. */
 export const FIRST_ROLE: Role = "administrator";
+
+/** Roles whose people handle evidence. */
+export const LAB_ROLES: Role[] = ["technician", "investigator", "lead"];

@@ -1,0 +1,26 @@
+"use server";
+
+import { revalidatePath } from "next/cache";
+import { handOver } from "@/lib/evidence/hand-over";
+import { registerItem } from "@/lib/evidence/register-item";
+import { HandOverInput, RegisterItemInput } from "@/lib/evidence/schemas";
+import { action } from "@/lib/http/action";
+import { routes } from "@/lib/routes";
+
+export const register = action(
+  { permission: "evidence.register", input: RegisterItemInput },
+  async (actor, input) => {
+    const item = await registerItem(actor, input);
+    revalidatePath(routes.evidence(input.caseId));
+    return item;
+  },
+);
+
+export const writeEntry = action(
+  { permission: "evidence.handOver", input: HandOverInput },
+  async (actor, input) => {
+    const entry = await handOver(actor, input);
+    revalidatePath(routes.evidence(input.caseId));
+    return entry;
+  },
+);
