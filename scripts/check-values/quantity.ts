@@ -16,7 +16,9 @@ export function quantity<Shape extends z.ZodRawShape>(
   return (inputs) => {
     const parsed = schema.safeParse(inputs);
     if (!parsed.success)
-      throw new UnsupportedRow(`inputs of another form: ${z.prettifyError(parsed.error)}`);
+      throw new UnsupportedRow(
+        `inputs of another form: ${parsed.error.issues.map(({ message }) => message).join("; ")}`,
+      );
     return compute(parsed.data);
   };
 }

@@ -13,7 +13,7 @@ import {
   type DecarburizationCriterion,
 } from "@/lib/hardness/decarburization";
 import { CHD_LIMIT_HV, NHD_OFFSET_HV, shdLimitHv } from "@/lib/hardness/depth-limits";
-import { effectiveCaseHrc } from "@/lib/hardness/effective-case";
+import { CARBURIZED_EFFECTIVE_CASE_HRC, effectiveCaseHrc } from "@/lib/hardness/effective-case";
 import { ALL_TABLE_IDS, getTable, isTableId } from "@/lib/hardness/published-tables";
 import {
   byTrack,
@@ -196,8 +196,10 @@ export const TRAVERSE_QUANTITIES: Readonly<Record<string, Quantity>> = {
     decarburization(inputs, { kind: "plateau" }),
   ),
   effective_case_HRC: quantity(
-    { C: z.string(), process: z.literal("flame/induction") },
-    ({ C }) => {
+    { C: z.string().optional(), process: z.enum(["flame/induction", "carburized"]) },
+    ({ C, process }) => {
+      if (process === "carburized") return CARBURIZED_EFFECTIVE_CASE_HRC;
+      if (C === undefined) throw new UnsupportedRow("no carbon content is given");
       const hrc = effectiveCaseHrc(C);
       return typeof hrc === "number" ? hrc : hrc.verdict;
     },
