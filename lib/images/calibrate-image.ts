@@ -6,10 +6,8 @@ import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { writeCase } from "@/lib/cases/write-case";
 import { AppError } from "@/lib/errors";
-import { formatWithUncertainty } from "@/lib/format/numbers";
 import { parseInput } from "@/lib/http/parse-input";
 import { pixelSizeFromFile, pixelSizeFromTwoPoints } from "@/lib/imaging/calibration";
-import { mmFromUm } from "@/lib/units/length";
 import { LABEL_PREFIX } from "@/lib/records/constants";
 import {
   addVersion,
@@ -21,11 +19,10 @@ import {
 import { type CalibrationContent, CalibrateImageInput } from "./calibration-schemas";
 import { caseOfImage, type OpenImage, openImage } from "./open-image";
 import { readPictureMarks, type StoredScale } from "./picture-marks";
+import { pixelSizeText } from "./pixel-size-text";
 import { remeasure } from "./write-mark";
 
 const METHOD = { name: "Scale of a picture", version: "1" } as const;
-/** Pixels smaller than this are given in micrometres. */
-const SMALL_PIXEL_UM = 1;
 
 /**
  * Sets the scale of a picture, or changes it: every measured mark then gets a new version with the
@@ -106,24 +103,11 @@ function contentOf(image: OpenImage, settings: CalibrationContent["settings"]): 
 }
 
 function versionOf(content: CalibrationContent): VersionContent {
-  const uncertaintyUm = content.umPerPx * content.relativeUncertainty;
-  const inMm = content.umPerPx >= SMALL_PIXEL_UM;
-  const unit = inMm ? "mm" : "µm";
-  const value = inMm ? mmFromUm(content.umPerPx) : content.umPerPx;
-  const expandedUncertainty = inMm ? mmFromUm(uncertaintyUm) : uncertaintyUm;
+  const size = pixelSizeText(content);
   return {
     content,
-    quotes: {
-      pixelSize: {
-        label: "Pixel size",
-        text: formatWithUncertainty(value, expandedUncertainty, unit),
-        value,
-        unit,
-        expandedUncertainty,
-        source: "measured",
-      },
-    },
-    headline: { value, unit, expandedUncertainty },
+    quotes: { pixelSize: { label: "Pixel size", ...size, source: "measured" } },
+    headline: size,
     method: METHOD,
   };
 }

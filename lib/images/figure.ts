@@ -9,7 +9,7 @@ import { AppError, notFound } from "@/lib/errors";
 import { formatCount } from "@/lib/format/numbers";
 import { figureOverlay } from "./figure-overlay";
 import { smallPicture } from "./figure-picture";
-import { pictureTitle } from "./picture-title";
+import { pictureTitle } from "./picture-facts";
 import { headlineOf, markTitle } from "./mark-names";
 import { caseOfImage } from "./open-image";
 import { readPictureMarks, type StoredMark } from "./picture-marks";
