@@ -277,7 +277,10 @@ function relates(actor: Actor, subject: CaseSubject, relation: Relation): boolea
         (subject.organisationId === actor.organisationId && subject.state !== "draft")
       );
     case "assigned":
-      return isAssigned(actor, subject) || subject.requesterId === actor.id;
+      return (
+        subject.requesterId === actor.id ||
+        (isAssigned(actor, subject) && subject.state !== "draft")
+      );
     case "any":
       return (
         (subject.state !== "draft" || subject.requesterId === actor.id) &&
