@@ -23,6 +23,7 @@ export default defineConfig({
           name: "pure",
           environment: "node",
           include: ["tests/{unit,reference,architecture,scripts}/**/*.test.ts"],
+          setupFiles: ["tests/setup/console.ts"],
         },
       },
       {
@@ -31,6 +32,7 @@ export default defineConfig({
           name: "components",
           environment: "jsdom",
           include: ["tests/components/**/*.test.tsx"],
+          setupFiles: ["tests/setup/console.ts"],
         },
       },
       {
