@@ -13,7 +13,7 @@ import { takeLock } from "./lib/lock-file.mjs";
 import { checkNodeVersion, ensureNodePackages } from "./lib/node-packages.mjs";
 import { isPortFree, readPort } from "./lib/ports.mjs";
 import { writePrivateJson } from "./lib/private-file.mjs";
-import { Failure, formatDuration, say, sayBold, sayDetail, step } from "./lib/report.mjs";
+import { Failure, formatDuration, orExit, say, sayBold, sayDetail, step } from "./lib/report.mjs";
 import { root } from "./lib/root.mjs";
 import { localPorts, localSecrets } from "./lib/secrets.mjs";
 import { effectiveSettings, externalServices, givenSettings } from "./lib/settings.mjs";
@@ -26,6 +26,7 @@ import {
 } from "./lib/state-folder.mjs";
 import { supervisedRun } from "./lib/supervised-run.mjs";
 
+orExit(checkNodeVersion);
 const dev = process.argv.includes("--dev");
 const given = givenSettings(root);
 const external = externalServices(given);
@@ -34,7 +35,6 @@ const folder = stateFolderFor({
   isRoot: process.getuid() === 0,
   chosen: given.RIVERLINE_STATE,
 });
-let lock;
 
 function alreadyRunning(holder) {
   return new Failure(
@@ -147,15 +147,10 @@ function sayReady(settings, took) {
   say("  Ctrl-C stops everything and keeps all data.");
 }
 
-try {
-  checkNodeVersion();
+const lock = orExit(() => {
   say(`Riverline, state in ${folder}`);
   checkSpace();
   prepareStateFolder(folder);
-  lock = takeLock(path.join(folder, "lock"), { busy: alreadyRunning });
-} catch (error) {
-  if (!(error instanceof Failure)) throw error;
-  process.stderr.write(`\n${error.message}\n`);
-  process.exit(1);
-}
+  return takeLock(path.join(folder, "lock"), { busy: alreadyRunning });
+});
 await supervisedRun({ folder, root, work: start, whenStopped: () => lock.release() });

@@ -12,7 +12,16 @@ import { ensureCommands } from "./lib/debian-packages.mjs";
 import { endLeftOvers } from "./lib/left-overs.mjs";
 import { takeLock } from "./lib/lock-file.mjs";
 import { checkNodeVersion, ensureNodePackages } from "./lib/node-packages.mjs";
-import { Failure, formatDuration, say, sayBold, sayDetail, Stopped, step } from "./lib/report.mjs";
+import {
+  Failure,
+  formatDuration,
+  orExit,
+  say,
+  sayBold,
+  sayDetail,
+  Stopped,
+  step,
+} from "./lib/report.mjs";
 import { root } from "./lib/root.mjs";
 import { checkDiskSpace, LATER_START_MB, prepareStateFolder } from "./lib/state-folder.mjs";
 import { supervisedRun } from "./lib/supervised-run.mjs";
@@ -131,9 +140,11 @@ async function servicesFor(children) {
 /** Serves tests until somebody stops it. */
 async function keepServices() {
   const folder = keptFolder();
-  prepareStateFolder(folder);
   const busy = ({ pid }) => new Failure(`Test services are already kept up by process ${pid}.`);
-  const lock = takeLock(path.join(folder, "lock"), { busy });
+  const lock = orExit(() => {
+    prepareStateFolder(folder);
+    return takeLock(path.join(folder, "lock"), { busy });
+  });
   await endLeftOvers(folder);
   await supervisedRun({
     folder,
@@ -152,7 +163,7 @@ async function keepServices() {
 async function runAndReport(work) {
   const begun = performance.now();
   const { folder, remove } = makeThrowAwayFolder();
-  checkDiskSpace([{ folder, neededMb: LATER_START_MB * 2 }]);
+  orExit(() => checkDiskSpace([{ folder, neededMb: LATER_START_MB * 2 }]));
   await supervisedRun({
     folder,
     root,
@@ -173,14 +184,8 @@ async function runAndReport(work) {
   });
 }
 
-try {
-  checkNodeVersion();
-  const [flag, project, ...filters] = process.argv.slice(2);
-  if (flag === "--services") await keepServices();
-  else if (flag === "--only") await runAndReport((children) => onlyOne(children, project, filters));
-  else await runAndReport(everything);
-} catch (error) {
-  if (!(error instanceof Failure)) throw error;
-  process.stderr.write(`\n${error.message}\n`);
-  process.exit(1);
-}
+orExit(checkNodeVersion);
+const [flag, project, ...filters] = process.argv.slice(2);
+if (flag === "--services") await keepServices();
+else if (flag === "--only") await runAndReport((children) => onlyOne(children, project, filters));
+else await runAndReport(everything);

@@ -1,13 +1,13 @@
 /** The checks that need no database, in well under a minute: format, lint, types and pure tests. */
 import { checkNodeVersion, ensureNodePackages } from "./lib/node-packages.mjs";
-import { say } from "./lib/report.mjs";
+import { orExit, say } from "./lib/report.mjs";
 import { root } from "./lib/root.mjs";
 import { supervisedRun } from "./lib/supervised-run.mjs";
 import { TestCounts } from "./lib/test-counts.mjs";
 import { makeThrowAwayFolder } from "./lib/test-services.mjs";
 import { checks, runCheck, runTests } from "./lib/test-stages.mjs";
 
-checkNodeVersion();
+orExit(checkNodeVersion);
 const counts = new TestCounts();
 const { folder, remove } = makeThrowAwayFolder();
 

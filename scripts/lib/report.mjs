@@ -17,6 +17,17 @@ export class Stopped extends Error {
   name = "Stopped";
 }
 
+/** Runs what comes before any child is started; a failure there ends the command with its words. */
+export function orExit(work) {
+  try {
+    return work();
+  } catch (error) {
+    if (!(error instanceof Failure)) throw error;
+    process.stderr.write(`\n${error.message}\n`);
+    process.exit(1);
+  }
+}
+
 export function formatDuration(ms) {
   if (ms < 60_000) return `${(ms / 1000).toFixed(1)} s`;
   return `${Math.floor(ms / 60_000)} min ${Math.round((ms % 60_000) / 1000)} s`;

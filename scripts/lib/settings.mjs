@@ -1,6 +1,7 @@
 import { existsSync, readFileSync } from "node:fs";
 import path from "node:path";
-import { parseEnv } from "node:util";
+// As a whole: a Node too old for parseEnv must still get as far as the check of its version.
+import util from "node:util";
 
 /**
  * Variables of `.env` in the checkout, under those that are really set. Empty counts as not set.
@@ -10,7 +11,7 @@ import { parseEnv } from "node:util";
  */
 export function givenSettings(root, environment = process.env) {
   const file = path.join(root, ".env");
-  const fromFile = existsSync(file) ? parseEnv(readFileSync(file, "utf8")) : {};
+  const fromFile = existsSync(file) ? util.parseEnv(readFileSync(file, "utf8")) : {};
   const merged = { ...fromFile, ...environment };
   return Object.fromEntries(Object.entries(merged).filter(([, value]) => value !== ""));
 }

@@ -1,5 +1,6 @@
 import { createHash } from "node:crypto";
-import { chmodSync, existsSync, mkdirSync, realpathSync, statfsSync, statSync } from "node:fs";
+// As a whole: a Node too old for statfs must still get as far as the check of its version.
+import fs from "node:fs";
 import path from "node:path";
 import { Failure } from "./report.mjs";
 
@@ -11,15 +12,15 @@ export const LATER_START_MB = 300;
 export function stateFolderFor({ root, isRoot, chosen }) {
   if (chosen) return path.resolve(chosen);
   if (!isRoot) return path.join(root, ".riverline");
-  const hash = createHash("sha256").update(realpathSync(root)).digest("hex").slice(0, 12);
+  const hash = createHash("sha256").update(fs.realpathSync(root)).digest("hex").slice(0, 12);
   return path.join("/var/lib/riverline", hash);
 }
 
 /** Makes the folder private to its owner, and refuses one that belongs to somebody else. */
 export function prepareStateFolder(folder) {
   try {
-    mkdirSync(folder, { recursive: true, mode: 0o755 });
-    const stat = statSync(folder);
+    fs.mkdirSync(folder, { recursive: true, mode: 0o755 });
+    const stat = fs.statSync(folder);
     if (stat.uid !== process.getuid()) {
       throw new Failure(
         `The state folder ${folder} belongs to another user of this machine (user id ${stat.uid}).`,
@@ -28,8 +29,8 @@ export function prepareStateFolder(folder) {
       );
     }
     // A folder that lets the database's group pass (mode 0710) is left so: it may be in use.
-    if ((stat.mode & 0o067) !== 0) chmodSync(folder, 0o700);
-    mkdirSync(path.join(folder, "logs"), { recursive: true, mode: 0o700 });
+    if ((stat.mode & 0o067) !== 0) fs.chmodSync(folder, 0o700);
+    fs.mkdirSync(path.join(folder, "logs"), { recursive: true, mode: 0o700 });
   } catch (error) {
     if (error instanceof Failure) throw error;
     throw new Failure(
@@ -42,8 +43,8 @@ export function prepareStateFolder(folder) {
 /** Free space for this user in MB, on the disk that holds the folder or its nearest parent. */
 export function freeMegabytes(folder) {
   let place = path.resolve(folder);
-  while (!existsSync(place)) place = path.dirname(place);
-  const stat = statfsSync(place);
+  while (!fs.existsSync(place)) place = path.dirname(place);
+  const stat = fs.statfsSync(place);
   return Math.floor((stat.bavail * stat.bsize) / MB);
 }
 
