@@ -10,7 +10,8 @@ export type Reader = Database | Transaction;
 
 const kept = globalThis as typeof globalThis & { riverlinePool?: mysql.Pool };
 
-function pool(): mysql.Pool {
+/** The pool behind `database()`, for what Drizzle does not offer. */
+export function connectionPool(): mysql.Pool {
   if (kept.riverlinePool) return kept.riverlinePool;
   const made = mysql.createPool({
     uri: env().DATABASE_URL,
@@ -28,7 +29,7 @@ let made: Database | undefined;
 
 /** The database of this process; the pool outlives hot reloads. */
 export function database(): Database {
-  made ??= drizzle(pool(), { schema, mode: "planetscale" });
+  made ??= drizzle(connectionPool(), { schema, mode: "planetscale" });
   return made;
 }
 

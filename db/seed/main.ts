@@ -3,7 +3,9 @@ import { closeDatabase, database } from "@/db/client";
 import { people, settings } from "@/db/schema";
 import { env } from "@/lib/env";
 import { objectStore } from "@/lib/storage/s3";
+import { castOf } from "./actors";
 import { seedPeople } from "./people";
+import { writeStory } from "./story";
 
 const MARKER = "demo.seeded";
 
@@ -15,7 +17,7 @@ async function seed(): Promise<string> {
   if (done) return "the demonstration is in place";
   const [someone] = await db.select({ id: people.id }).from(people).limit(1);
   if (someone) return "people exist already; the demonstration is left out";
-  await seedPeople();
+  await writeStory(await castOf(await seedPeople()));
   await db.insert(settings).values({ name: MARKER, value: { at: new Date().toISOString() } });
   return "the demonstration is written";
 }
