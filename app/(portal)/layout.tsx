@@ -16,7 +16,7 @@ export default async function PortalLayout({ children }: { children: React.React
   const actor = await pageActor("self.view");
   const deadlines = await currentDeadlines();
   const may = (action: Parameters<typeof decide>[1]) => decide(actor, action).allowed;
-  const endsAfterMs = deadlines ? deadlines.idleEndsAt.getTime() - Date.now() : 0;
+  const endsAfterMs = deadlines?.endsInMs ?? 0;
   return (
     <Toasts>
       <SkipLink />

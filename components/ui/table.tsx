@@ -8,11 +8,17 @@ export function Table({
   caption,
   className,
   boxClassName,
+  headSticks = false,
   children,
   ...rest
-}: ComponentProps<"table"> & { caption: string; boxClassName?: string }) {
+}: ComponentProps<"table"> & {
+  caption: string;
+  boxClassName?: string;
+  /** The head stays under the top bar; the page then scrolls sideways, not the table. */
+  headSticks?: boolean;
+}) {
   return (
-    <div className={classNames("overflow-x-auto", boxClassName)}>
+    <div className={classNames(!headSticks && "overflow-x-auto", boxClassName)}>
       <table
         className={classNames("w-full border-separate border-spacing-0 text-13", className)}
         {...rest}

@@ -45,11 +45,10 @@ export const cases = mysqlTable(
     /** Calendar day at the laboratory; null until a date is set. */
     dueOn: date("due_on", { mode: "string" }),
     /** Orders the list by due date: open cases first, then signed, then ended; no date comes last. */
-    dueKey: int("due_key")
-      .generatedAlwaysAs(
-        sql`(case when stage between 1 and 5 then 0 when stage = 6 then 2 else 3 end) * 1000000 + coalesce(to_days(due_on), 999999)`,
-        { mode: "stored" },
-      ),
+    dueKey: int("due_key").generatedAlwaysAs(
+      sql`(case when stage between 1 and 5 then 0 when stage = 6 then 2 else 3 end) * 1000000 + coalesce(to_days(due_on), 999999)`,
+      { mode: "stored" },
+    ),
     /** Statement of the accepting lead that nobody assigned owns design, process or supplier. */
     impartialityStatement: text("impartiality_statement"),
     /** Reason given when declined, cancelled or reopened; null otherwise. */

@@ -8,12 +8,14 @@ import type { Actor } from "./actor";
 
 const TOUCH_EVERY_MS = 30_000;
 
-export type SignInDeadlines = { idleEndsAt: Date; endsAt: Date };
+/** `endsInMs` counts from the moment it was worked out, so that clocks need not agree. */
+export type SignInDeadlines = { idleEndsAt: Date; endsAt: Date; endsInMs: number };
 
 export function deadlinesOf(row: { startedAt: Date; lastUsedAt: Date }): SignInDeadlines {
   const endsAt = new Date(row.startedAt.getTime() + env().SESSION_MAX_HOURS * 3_600_000);
   const idle = new Date(row.lastUsedAt.getTime() + env().SESSION_IDLE_MINUTES * 60_000);
-  return { idleEndsAt: idle < endsAt ? idle : endsAt, endsAt };
+  const idleEndsAt = idle < endsAt ? idle : endsAt;
+  return { idleEndsAt, endsAt, endsInMs: idleEndsAt.getTime() - Date.now() };
 }
 
 export async function startSignIn(person: { id: string; signInEpoch: number }): Promise<string> {

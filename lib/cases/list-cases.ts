@@ -1,6 +1,5 @@
 import "server-only";
 import {
-  aliasedTable,
   and,
   asc,
   between,

@@ -66,7 +66,7 @@ export function CaseTable({ list, params, showsClient, now }: Props) {
   for (const group of groups) if (group) sizes.set(group, (sizes.get(group) ?? 0) + 1);
   return (
     <>
-      <Table caption="Cases">
+      <Table caption="Cases" headSticks>
         <thead className="sticky top-topbar z-10">
           <tr>
             {heads.map(({ sort, label, numeric, hidden }) =>
@@ -115,7 +115,7 @@ export function CaseTable({ list, params, showsClient, now }: Props) {
                     {row.number ?? "Draft"}
                   </Link>
                 </Td>
-                <Td className="max-w-0 min-w-56 truncate font-strong" title={row.title}>
+                <Td className="w-full max-w-0 min-w-56 truncate font-strong" title={row.title}>
                   {row.title}
                 </Td>
                 {showsClient && <Td className="whitespace-nowrap text-ink-2">{row.client}</Td>}

@@ -28,7 +28,7 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
     ...periods.map((period) => `${period.stage} from ${formatDay(period.from)}`),
     ...(dueOn ? [`due ${formatDate(dueOn)}`] : []),
   ].join(", ");
-  let labelEnd = -1;
+  const labelled = spacedOut(periods.map((period) => x(Date.parse(period.from))));
   return (
     <Panel>
       <PanelHead
@@ -61,16 +61,17 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
             />
           )}
           <g fontSize={12} fill="var(--ink-2)">
-            {periods.map((period) => {
-              const at = x(Date.parse(period.from));
-              if (at < labelEnd) return null;
-              labelEnd = at + LABEL_MIN;
-              return (
-                <text key={period.from} x={Math.min(at, WIDTH - LABEL_MIN)} y={66}>
+            {periods.map((period, i) =>
+              labelled[i] ? (
+                <text
+                  key={period.from}
+                  x={Math.min(x(Date.parse(period.from)), WIDTH - LABEL_MIN)}
+                  y={66}
+                >
                   {period.stage} {formatDay(period.from)}
                 </text>
-              );
-            })}
+              ) : null,
+            )}
           </g>
           <path d={`M${x(now.getTime())} 14V56`} stroke="var(--ink)" strokeWidth={1.5} />
           <text
@@ -103,4 +104,15 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
       </PanelBody>
     </Panel>
   );
+}
+
+/** Which of the labels at these places fit beside one another, the first first. */
+function spacedOut(places: readonly number[]): boolean[] {
+  return places.reduce<{ fits: boolean[]; end: number }>(
+    ({ fits, end }, place) =>
+      place < end
+        ? { fits: [...fits, false], end }
+        : { fits: [...fits, true], end: place + LABEL_MIN },
+    { fits: [], end: -Infinity },
+  ).fits;
 }
