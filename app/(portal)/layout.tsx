@@ -1,4 +1,5 @@
 import { SessionEndWarning } from "@/components/frame/session-end-warning";
+import { FindField } from "@/components/frame/find-field";
 import { SkipLink } from "@/components/frame/skip-link";
 import { TopBar } from "@/components/frame/top-bar";
 import { Toasts } from "@/components/ui/toasts";
@@ -37,6 +38,7 @@ export default async function PortalLayout({ children }: { children: React.React
           ...(may("person.view") ? [{ href: routes.people(), label: "People" }] : []),
           ...(may("audit.verify") ? [{ href: routes.audit(), label: "Audit log" }] : []),
         ]}
+        search={<FindField />}
         signOut={signOut}
       />
       <SessionEndWarning
