@@ -13,7 +13,8 @@ export function stagePeriods(
     const stage = STAGES[step - 1];
     const last = periods.at(-1);
     if (last) last.to = move.at;
-    if (!stage) return periods;
+    if (!stage && last) return periods;
+    if (!stage) continue;
     if (last?.step !== step) periods.push({ stage, step, from: move.at, to: now.toISOString() });
     else last.to = now.toISOString();
   }

@@ -42,7 +42,7 @@ function changedFields(
   const left = asFields(before);
   const right = asFields(after);
   return [...new Set([...Object.keys(left), ...Object.keys(right)])]
-    .filter((name) => JSON.stringify(left[name]) !== JSON.stringify(right[name]))
+    .filter((name) => JSON.stringify(left[name] ?? null) !== JSON.stringify(right[name] ?? null))
     .map((name) => ({ name, before: left[name], after: right[name] }));
 }
 
