@@ -2,6 +2,7 @@
 export const CITED_VALUE = "citedValue";
 export const FIGURE = "figure";
 export const CHART_FIGURE = "chartFigure";
+export const SECTION_HEADING = "sectionHeading";
 
 /** Any node of a Tiptap document, as JSON. */
 export type DocumentNode = {

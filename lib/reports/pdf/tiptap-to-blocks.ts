@@ -1,11 +1,15 @@
 import "server-only";
-import { CHART_FIGURE, FIGURE, plainTextOf, type DocumentNode } from "@/lib/findings/document";
+import {
+  CHART_FIGURE,
+  type DocumentNode,
+  FIGURE,
+  plainTextOf,
+  SECTION_HEADING,
+} from "@/lib/findings/document";
 import { UnknownDocumentPart, type DocumentResolver } from "./document-resolver";
 import type { Block, ReportSection } from "./model";
 import { inlineRuns } from "./tiptap-runs";
 import { tableBlock } from "./tiptap-table";
-
-export const SECTION_HEADING = "sectionHeading";
 
 /** Counts on over a whole report, so that figures are numbered in the order they are printed. */
 export type Numbering = { nextFigure: number };
