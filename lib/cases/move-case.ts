@@ -21,6 +21,7 @@ export async function moveCase(
   name: MoveName,
   change: Partial<typeof cases.$inferInsert> = {},
   reason: string | null = null,
+  details: Record<string, unknown> = {},
 ): Promise<void> {
   const move = MOVES[name];
   if (!canMove(name, row.state)) {
@@ -51,6 +52,6 @@ export async function moveCase(
       label: change.number ?? row.number ?? (row.title || "Draft"),
     },
     before: { state: row.state },
-    after: { state: move.to, reason, ...change },
+    after: { state: move.to, reason, ...change, ...details },
   });
 }

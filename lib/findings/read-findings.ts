@@ -7,7 +7,7 @@ import { decide } from "@/lib/auth/policy";
 import { getCase } from "@/lib/cases/get-case";
 import type { Chart } from "@/lib/charts/primitives";
 import { notFound } from "@/lib/errors";
-import { captionOf } from "@/lib/images/caption";
+import { pictureTitle } from "@/lib/images/picture-facts";
 import { chartOfTraverse } from "@/lib/traverses/chart-of-traverse";
 import { loadTraverses } from "@/lib/traverses/read-traverses";
 import { type Citable, citableValues } from "./citable-values";
@@ -73,7 +73,7 @@ export async function readFindings(actor: Actor, caseId: string): Promise<Findin
     pictures: pictures.map(({ id, label, content }) => ({
       id,
       label,
-      caption: captionOf(content),
+      caption: pictureTitle(content),
     })),
     traverses: traverses
       .filter((traverse) => !traverse.isVoid)

@@ -1,7 +1,6 @@
 import "server-only";
 import { eq } from "drizzle-orm";
 import { reportIssues } from "@/db/schema";
-import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { moveCase } from "@/lib/cases/move-case";
 import { writeCase } from "@/lib/cases/write-case";
@@ -19,14 +18,6 @@ export async function sendBack(actor: Actor, raw: unknown): Promise<void> {
     if (!issue) throw new AppError("LOCKED", "There is no open issue to send back.");
     await tx.update(reportIssues).set({ state: "drafting" }).where(eq(reportIssues.id, issue.id));
     await moveCase(tx, actor, row, "sendBack", {}, input.note);
-    await recordEvent(tx, {
-      caseId: row.id,
-      actor,
-      action: "findings.sendBack",
-      subject: { kind: "report_issue", id: issue.id, label: `Findings, issue ${issue.number}` },
-      before: null,
-      after: { note: input.note },
-    });
     await mailInvestigator(tx, row, `${actor.name} sent the findings back.`, input.note);
   });
 }

@@ -1,7 +1,6 @@
 import "server-only";
 import { eq } from "drizzle-orm";
 import { people, reportIssues } from "@/db/schema";
-import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { gateLedger } from "@/lib/cases/gates";
 import { moveCase } from "@/lib/cases/move-case";
@@ -37,14 +36,9 @@ export async function sendForSignOff(actor: Actor, raw: unknown): Promise<void> 
       );
     }
     await tx.update(reportIssues).set({ state: "approval" }).where(eq(reportIssues.id, issue.id));
-    await moveCase(tx, actor, row, "sendForSignOff");
-    await recordEvent(tx, {
-      caseId: row.id,
-      actor,
-      action: "findings.sendForSignOff",
-      subject: { kind: "report_issue", id: issue.id, label: `Findings, issue ${issue.number}` },
-      before: null,
-      after: { revision: issue.revision, rootCause: issue.rootCause },
+    await moveCase(tx, actor, row, "sendForSignOff", {}, null, {
+      revision: issue.revision,
+      rootCause: issue.rootCause,
     });
     const [lead] = row.leadId
       ? await tx.select({ email: people.email }).from(people).where(eq(people.id, row.leadId))

@@ -1,7 +1,6 @@
 import "server-only";
 import { and, eq } from "drizzle-orm";
 import { cases, people, reportIssues } from "@/db/schema";
-import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { type CaseSubject, roleMay } from "@/lib/auth/policy";
 import { moveCase } from "@/lib/cases/move-case";
@@ -56,7 +55,9 @@ export async function sendToSecondReader(actor: Actor, raw: unknown): Promise<vo
         .update(reportIssues)
         .set({ state: "peer_review" })
         .where(eq(reportIssues.id, issue.id));
-      await moveCase(tx, actor, row, "sendToSecondReader", { secondReaderId: person.id });
+      await moveCase(tx, actor, row, "sendToSecondReader", { secondReaderId: person.id }, null, {
+        revision: issue.revision,
+      });
       await queueMail(tx, {
         to: person.email,
         subject: `${row.number}: findings to read, ${row.title}`,
