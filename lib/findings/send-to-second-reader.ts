@@ -65,14 +65,6 @@ export async function sendToSecondReader(actor: Actor, raw: unknown): Promise<vo
         facts: [["Case", `${row.number} ${row.title}`]],
         button: { label: "Read the findings", path: routes.signOff(row.id) },
       });
-      await recordEvent(tx, {
-        caseId: row.id,
-        actor,
-        action: "findings.sendToSecondReader",
-        subject: { kind: "report_issue", id: issue.id, label: `Findings, issue ${issue.number}` },
-        before: { secondReaderId: row.secondReaderId },
-        after: { secondReaderId: person.id, revision: issue.revision },
-      });
     },
   );
 }

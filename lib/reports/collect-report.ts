@@ -19,7 +19,7 @@ import { chartTraverseIdsOf } from "@/lib/findings/document";
 import type { IssueRow } from "@/lib/findings/find-issue";
 import { readingContent } from "@/lib/findings/reading-schema";
 import { formatDate, formatDateTime } from "@/lib/format/dates";
-import { openAnswers } from "@/lib/reports/open-questions";
+import { openQuestions } from "@/lib/reports/open-questions";
 import { laboratory } from "@/lib/people/laboratory";
 import { ROLE_NAMES } from "@/lib/people/constants";
 import { chartOfTraverse } from "@/lib/traverses/chart-of-traverse";
@@ -176,7 +176,7 @@ export async function collectReport(
     supplied: citable
       .filter((value) => value.group === "Field return")
       .map((value) => [value.label, value.text]),
-    unknowns: await openAnswers(reader, row.id),
+    unknowns: await openQuestions(reader, row.id),
     conversions: traverses
       .filter((traverse) => !traverse.isVoid)
       .map((traverse) => [

@@ -85,9 +85,7 @@ export async function signReport(
     }
     const at = new Date();
     const frozen = await collectReport(tx, row, issue, { id: actor.id, at });
-    const manifestSha256 = sha256Hex(
-      canonicalJson({ ...frozen, charts: Object.keys(frozen.charts).sort() }),
-    );
+    const manifestSha256 = sha256Hex(canonicalJson(frozen));
     const [result] = await tx
       .update(reportIssues)
       .set({
