@@ -4,7 +4,7 @@ import { isTableId } from "@/lib/hardness/published-tables";
 import { isScale } from "@/lib/hardness/scales";
 import { DEPTH_KINDS, HARDENING_PROCESSES, HARDNESS_METHODS, READINGS_MAX } from "./constants";
 
-const CELL_MAX = 60;
+export const CELL_MAX = 200;
 const text = (max: number) => z.string().trim().max(max, `Use at most ${max} characters.`);
 const reason = text(500).min(1, "Say why.");
 /** What stands in a cell, as typed: a word in a number cell is kept, and told to the person. */
