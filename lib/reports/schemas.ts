@@ -7,8 +7,8 @@ export const SignReportInput = z.object({
   caseId,
   /** Digest of the text that was on screen. */
   documentSha256: z.string().length(64),
-  hasRead: z.literal(true, "Say that you have read all of it."),
-  hasNotMeasured: z.literal(true, "Say that you did not make the measurements."),
+  hasRead: z.boolean().refine((said) => said, "Say that you have read all of it."),
+  hasNotMeasured: z.boolean().refine((said) => said, "Say that you did not make the measurements."),
   password: z.string().min(1, "Type your password.").max(PASSWORD_MAX_LENGTH),
 });
 
