@@ -1,7 +1,14 @@
 "use client";
 
 import { useVirtualizer } from "@tanstack/react-virtual";
-import { useCallback, useMemo, useRef, type ClipboardEvent, type KeyboardEvent } from "react";
+import {
+  useCallback,
+  useMemo,
+  useRef,
+  type ClipboardEvent,
+  type KeyboardEvent,
+  type ReactNode,
+} from "react";
 import { classNames } from "@/components/ui/class-names";
 import { Kbd } from "@/components/ui/kbd";
 import type { Scale } from "@/lib/hardness/scales";
@@ -14,7 +21,7 @@ const ROW_PX = 36;
 /** Below this all rows stand in the page, so that find and print reach them. */
 const VIRTUAL_FROM = 200;
 const HEAD =
-  "h-11 border-r border-b border-rule bg-surface-2 px-2.5 text-12 leading-[15px] font-strong";
+  "h-11 border-r border-b border-rule bg-surface-2 px-2.5 text-12 leading-[15px] font-strong whitespace-nowrap";
 
 export type PasteGridProps = {
   content: TraverseContent;
@@ -30,6 +37,8 @@ export type PasteGridProps = {
   onPasteBlock: (fromRow: number, text: string) => void;
   onUndo: () => void;
   onAct: (act: RowAct, id: string) => void;
+  /** At the foot: what can be done with the whole table. */
+  acts: ReactNode;
 };
 
 function cellAt(target: EventTarget): { row: number; cell: string } | null {
@@ -144,7 +153,7 @@ export function PasteGrid(props: PasteGridProps) {
                 No.
               </th>
               {columns.map(({ name, head, sub, unit }) => (
-                <th key={name} scope="col" className={classNames(HEAD, "num")}>
+                <th key={name} scope="col" className={classNames(HEAD, "num min-w-14")}>
                   {head}
                   {sub ? <sub className="text-[9px] leading-none">{sub}</sub> : null}
                   <span className="block font-normal text-ink-3">{unit}</span>
@@ -226,12 +235,15 @@ export function PasteGrid(props: PasteGridProps) {
           {problems.length > 20 ? <li>And {problems.length - 20} more.</li> : null}
         </ul>
       ) : null}
-      {isReadOnly ? null : (
-        <p className="no-print border-t border-rule px-3 py-2 text-12 text-ink-3">
-          Row {content.readings.length + 1}: type or paste. <Kbd>Tab</Kbd> next, <Kbd>Enter</Kbd>{" "}
-          down, <Kbd>Ctrl</Kbd> <Kbd>V</Kbd> paste a block.
-        </p>
-      )}
+      <div className="no-print flex items-center gap-2 border-t border-rule px-3 py-1.5 text-12 text-ink-3">
+        {isReadOnly ? null : (
+          <p>
+            Row {content.readings.length + 1}: type or paste. <Kbd>Tab</Kbd> next, <Kbd>Enter</Kbd>{" "}
+            down, <Kbd>Ctrl</Kbd> <Kbd>V</Kbd> paste a block.
+          </p>
+        )}
+        <div className="ml-auto">{props.acts}</div>
+      </div>
     </>
   );
 }

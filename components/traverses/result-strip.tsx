@@ -109,12 +109,19 @@ export function ResultStrip({ result }: { result: ResultContent }) {
         <Hardness name="Surface" of={result.surface} result={result} />
         <Hardness name="Core" of={result.core} result={result} />
       </dl>
-      <p className="mt-1.5 text-12 text-ink-3">
-        {depth ? `Uncertainty: ${depth.uncertaintyStatement} ` : ""}
-        {result.hasConversions
-          ? `Converted by ${result.tableTitles.join(", ")}. Converted hardness and strength do not replace the specified test.`
-          : ""}
-      </p>
     </section>
+  );
+}
+
+/** What the numbers are made of and what they do not replace. */
+export function ResultCautions({ result }: { result: ResultContent }) {
+  const { depth, hasConversions, tableTitles } = result;
+  return (
+    <p className="text-12 text-ink-3">
+      {hasConversions
+        ? `Converted by ${tableTitles.join(", ")}. Converted hardness and strength do not replace the specified test. `
+        : ""}
+      {depth ? `Uncertainty of depth: ${depth.uncertaintyStatement}` : ""}
+    </p>
   );
 }

@@ -19,13 +19,14 @@ import { entryModeOf, typedColumns, type EntryMode } from "./grid-columns";
 import type { RowAct } from "./grid-row";
 import { PasteGrid } from "./paste-grid";
 import { ReasonDialog, type Asked } from "./reason-dialog";
-import { ResultStrip } from "./result-strip";
+import { ResultCautions, ResultStrip } from "./result-strip";
 import { saveFile } from "./save-file";
 import { SaveMark } from "./save-mark";
 import { SettingsBar } from "./settings-bar";
 import { SettingsPanel } from "./settings-panel";
 import { indentsOf, putBack, takeReasonBack, withAnswer } from "./settle-indents";
 import { SettleList, type SettleAct } from "./settle-list";
+import { TableMenu } from "./table-menu";
 import { TraverseTabs, type TraverseTab } from "./traverse-tabs";
 import { useAutosave, type SaveTraverse } from "./use-autosave";
 import { useKeptDraft } from "./use-kept-draft";
@@ -156,6 +157,12 @@ export function TraverseStation(props: StationProps) {
     [change, result],
   );
 
+  const addTracks = () =>
+    change((now) => ({
+      ...now,
+      readings: now.readings.map((row) => ({ ...row, track: row.track ?? "1" })),
+    }));
+
   const { state } = autosave;
   const errors = state.kind === "failed" ? state.fields : {};
   const fileName = `${props.caseNumber}-${label}`;
@@ -285,56 +292,27 @@ export function TraverseStation(props: StationProps) {
             onPasteBlock={onPasteBlock}
             onUndo={editor.undo}
             onAct={onRowAct}
+            acts={
+              <TableMenu
+                label={label}
+                mode={mode}
+                onMode={isReadOnly ? null : setMode}
+                onSeveralRows={
+                  isReadOnly || columns.some(({ name }) => name === "track") ? null : addTracks
+                }
+                onSaveCsv={() =>
+                  saveFile(`${fileName}.csv`, "text/csv", traverseCsv(filled, result))
+                }
+                onWithdraw={props.onWithdraw && (() => setAsked({ kind: "withdraw", indents: [] }))}
+              />
+            }
           />
-          <div className="no-print flex flex-wrap items-center gap-2 border-t border-rule px-3 py-2">
-            <Button
-              small
-              onClick={() => saveFile(`${fileName}.csv`, "text/csv", traverseCsv(filled, result))}
-            >
-              Save as CSV
-            </Button>
-            {isReadOnly ? null : (
-              <>
-                <Button
-                  small
-                  look="quiet"
-                  onClick={() => setMode(mode === "diagonals" ? "hardness" : "diagonals")}
-                >
-                  {mode === "diagonals" ? "Type hardness instead" : "Type diagonals instead"}
-                </Button>
-                {columns.some(({ name }) => name === "track") ? null : (
-                  <Button
-                    small
-                    look="quiet"
-                    onClick={() =>
-                      change((now) => ({
-                        ...now,
-                        readings: now.readings.map((row) => ({ ...row, track: row.track ?? "1" })),
-                      }))
-                    }
-                    disabled={content.readings.length === 0}
-                  >
-                    Several rows of indents
-                  </Button>
-                )}
-              </>
-            )}
-            {props.onWithdraw === null ? null : (
-              <Button
-                small
-                look="quiet"
-                className="ml-auto"
-                onClick={() => setAsked({ kind: "withdraw", indents: [] })}
-              >
-                Withdraw {label}
-              </Button>
-            )}
-          </div>
         </section>
         <div className="grid min-w-0 gap-3">
           <ChartPanel chart={chart} fileName={fileName} />
           <ResultStrip result={result} />
           <SettleList content={filled} result={result} isReadOnly={isReadOnly} onAct={onSettle} />
+          <ResultCautions result={result} />
         </div>
       </div>
       {asked === null ? null : (

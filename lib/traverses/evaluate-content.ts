@@ -11,6 +11,16 @@ const PROBLEMS_LISTED = 50;
 const convertAll = (columns: readonly ConversionColumn[], hardness: number | null) =>
   hardness === null ? [] : columns.map(({ convert }) => convertedHardness(convert(hardness)));
 
+/** "indents 10 and 11"; null where it is about the traverse as a whole. */
+function whereText(
+  readings: readonly { readonly id: string; readonly number: number }[],
+  ids: readonly string[],
+): string | null {
+  if (ids.length === 0 || ids.length > 2) return null;
+  const numbers = readings.flatMap(({ id, number }) => (ids.includes(id) ? [number] : []));
+  return `${numbers.length === 1 ? "indent" : "indents"} ${numbers.join(" and ")}`;
+}
+
 function depthOf(found: TraverseDepth | null): ResultContent["depth"] {
   if (!found) return null;
   const { depth, limit } = found;
@@ -91,7 +101,9 @@ export function evaluateContent(
     symbol: evaluation.symbol,
     hasConversions,
     tableTitles: content.tableId === null || !hasConversions ? [] : [tableTitle(content.tableId)],
-    unsettled: items.filter(({ level }) => level === "must").map(({ text }) => text),
+    unsettled: items
+      .filter(({ level }) => level === "must")
+      .map(({ readingIds, text }) => whereText(evaluation.readings, readingIds) ?? text),
     readings: evaluation.readings.map((reading) => ({
       id: reading.id,
       number: reading.number,
