@@ -33,3 +33,7 @@ export const WithdrawImageInput = z.object({
   imageId: z.string().max(40),
   reason: line(500).min(1, "Say why it is withdrawn."),
 });
+
+export const PutBackImageInput = z.object({ imageId: z.string().max(40) });
+
+export const RestoreImageInput = z.object({ imageId: z.string().max(40) });

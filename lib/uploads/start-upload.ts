@@ -1,13 +1,14 @@
 import "server-only";
 import { and, eq } from "drizzle-orm";
 import { database, type Reader } from "@/db/client";
-import { records, uploads } from "@/db/schema";
+import { uploads } from "@/db/schema";
 import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { getCase } from "@/lib/cases/get-case";
 import { writeCase } from "@/lib/cases/write-case";
 import { AppError } from "@/lib/errors";
 import { parseInput } from "@/lib/http/parse-input";
+import { checkItem } from "@/lib/images/check-item";
 import { newId } from "@/lib/new-id";
 import { objectStore } from "@/lib/storage/s3";
 import type { z } from "zod";
@@ -38,20 +39,6 @@ async function sameFile(reader: Reader, actor: Actor, input: Input): Promise<Upl
     )
     .limit(1);
   return row ?? null;
-}
-
-async function checkItem(reader: Reader, { caseId, details }: Input): Promise<void> {
-  if (!details.itemId) return;
-  const [item] = await reader
-    .select({ id: records.id })
-    .from(records)
-    .where(
-      and(eq(records.id, details.itemId), eq(records.caseId, caseId), eq(records.kind, "item")),
-    );
-  if (item) return;
-  throw new AppError("INVALID", undefined, {
-    fields: { "details.itemId": "Choose an item of this case." },
-  });
 }
 
 function newRow(actor: Actor, input: Input, s3UploadId: string | null, id: string, key: string) {
@@ -107,7 +94,7 @@ export async function startUpload(actor: Actor, raw: unknown): Promise<UploadTic
     // Two windows may start the same file at once; the second goes on with the first's.
     const first = await sameFile(tx, actor, input);
     if (first) return first;
-    await checkItem(tx, input);
+    await checkItem(tx, input.caseId, input.details.itemId, "details.itemId");
     const made = newRow(actor, input, s3UploadId, id, key);
     await tx.insert(uploads).values(made);
     await recordEvent(tx, {
