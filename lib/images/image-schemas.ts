@@ -35,5 +35,3 @@ export const WithdrawImageInput = z.object({
 });
 
 export const PutBackImageInput = z.object({ imageId: z.string().max(40) });
-
-export const RestoreImageInput = z.object({ imageId: z.string().max(40) });
