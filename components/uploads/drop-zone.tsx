@@ -66,9 +66,6 @@ export function DropZone({
             ),
           })}
         >
-          <input
-            {...getInputProps({ "aria-label": isPicture ? "Pictures to add" : "Files to add" })}
-          />
           <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
             <Button look="primary" onClick={open}>
               {isPicture ? "Choose pictures" : "Choose files"}
@@ -79,6 +76,9 @@ export function DropZone({
             </p>
           </div>
           {isPicture && <PictureDetails details={details} items={items} onChange={setDetails} />}
+          <input
+            {...getInputProps({ "aria-label": isPicture ? "Pictures to add" : "Files to add" })}
+          />
         </div>
       )}
       {uploads.rows.length > 0 && (

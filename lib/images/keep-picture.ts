@@ -54,7 +54,7 @@ function contentOf(upload: UploadRow, { details: file }: MadePicture): ImageCont
     itemId: said.itemId ?? null,
     face: said.face ?? "",
     magnification: said.magnification ?? null,
-    takenOn: file.takenOn,
+    takenOn: said.takenOn ?? file.takenOn,
   };
 }
 

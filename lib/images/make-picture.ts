@@ -3,6 +3,7 @@ import path from "node:path";
 import { FileRefusal } from "@/lib/uploads/file-refusal";
 import type { ImageMediaType } from "./constants";
 import { type FileDetails, readFileDetails } from "./file-details";
+import type { StatedResolution } from "./file-resolution";
 import type { GreyWindow } from "./grey-window";
 import { scaleFactorsOf } from "./iiif";
 import { type PictureHead, readPicture } from "./read-picture";
@@ -18,6 +19,12 @@ export type MadePicture = {
   scaleFactors: number[];
 };
 
+/** The tags speak of the first page as it lies in the file, not of another page or of the turned one. */
+function asShown(stated: StatedResolution | null, head: PictureHead): StatedResolution | null {
+  if (stated === null || head.page > 0) return null;
+  return head.isOnItsSide ? { ...stated, x: stated.y, y: stated.x } : stated;
+}
+
 /**
  * Reads a picture, and makes and stores its tiles and thumbnail under `prefix`.
  * @throws FileRefusal when the picture cannot be taken; anything else is a failure of this machine
@@ -30,7 +37,8 @@ export async function makePicture(
   prefix: string,
 ): Promise<MadePicture> {
   const head = await readPicture(file, fileName);
-  const details = await readFileDetails(file, type);
+  const said = await readFileDetails(file, type);
+  const details = { ...said, resolution: asShown(said.resolution, head) };
   const folder = path.join(workFolder, "tiles");
   const scaleFactors = scaleFactorsOf(head.widthPx, head.heightPx);
   const shape = { widthPx: head.widthPx, heightPx: head.heightPx, scaleFactors };

@@ -21,6 +21,8 @@ export type PictureHead = {
   pages: number;
   /** The file asks to be turned or mirrored when shown. */
   isTurned: boolean;
+  /** Turned by a quarter, so that across in the file is down when shown. */
+  isOnItsSide: boolean;
 };
 
 const broken = (fileName: string) =>
@@ -83,5 +85,6 @@ export async function readPicture(file: string, fileName: string): Promise<Pictu
     page,
     pages,
     isTurned: (head.orientation ?? 1) > 1,
+    isOnItsSide: (head.orientation ?? 1) >= 5,
   };
 }

@@ -5,6 +5,7 @@ import path from "node:path";
 import { z } from "zod";
 import { database } from "@/db/client";
 import type { JobHandler } from "@/lib/jobs/handler";
+import { checkPaper } from "@/lib/uploads/check-paper";
 import { clearArrival, fetchOriginal } from "@/lib/uploads/fetch-original";
 import { FileRefusal } from "@/lib/uploads/file-refusal";
 import { findUpload, type UploadRow } from "@/lib/uploads/find-upload";
@@ -24,7 +25,10 @@ async function checkFile(upload: UploadRow, folder: string): Promise<CheckedFile
   const { sha256 } = await fetchOriginal(upload, file);
   const mediaType = await inspectFile(file, upload.fileName, upload.purpose);
   const imageType = IMAGE_MEDIA_TYPES.find((known) => known === mediaType);
-  if (upload.purpose !== "image" || !imageType) return { sha256, mediaType, picture: null };
+  if (upload.purpose !== "image" || !imageType) {
+    await checkPaper(file, upload.fileName, mediaType);
+    return { sha256, mediaType, picture: null };
+  }
   const prefix = tilePrefix(upload.id);
   const picture = await makePicture(file, upload.fileName, imageType, folder, prefix);
   return { sha256, mediaType, picture };

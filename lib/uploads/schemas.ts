@@ -7,7 +7,14 @@ const uploadPart = z.number().int().min(1).max(10_000);
 
 /** What becomes of the file: the description of a picture, or the caption of a paper. */
 export const uploadDetails = imageContent
-  .pick({ caption: true, technique: true, itemId: true, face: true, magnification: true })
+  .pick({
+    caption: true,
+    technique: true,
+    itemId: true,
+    face: true,
+    magnification: true,
+    takenOn: true,
+  })
   .partial()
   .extend({ isShareable: z.boolean().optional() });
 export type UploadDetails = z.infer<typeof uploadDetails>;

@@ -11,7 +11,9 @@ import { WORK_FOLDER_PREFIX } from "@/lib/images/take-in-image-job";
 import type { JobHandler } from "@/lib/jobs/handler";
 import { objectStore } from "@/lib/storage/s3";
 import { UNFINISHED_KEPT_DAYS } from "./constants";
+import { clearArrival } from "./fetch-original";
 import { findUpload, type UploadRow } from "./find-upload";
+import { refuseUpload } from "./refuse-upload";
 import { scheduleTidy } from "./schedule-tidy";
 
 const DAY_MS = 86_400_000;
@@ -40,6 +42,21 @@ async function giveUp(seen: UploadRow, before: Date): Promise<void> {
   await objectStore().remove(seen.key);
 }
 
+/** A worker that dies at its last try cannot say so; without this its file would be checked for ever. */
+async function refuseStuck(before: Date): Promise<void> {
+  const stuck = await database()
+    .select()
+    .from(uploads)
+    .where(and(eq(uploads.state, "sent"), lt(uploads.changedAt, before)));
+  for (const upload of stuck) {
+    const isRefused = await refuseUpload(
+      upload.id,
+      `Riverline could not make ${upload.fileName} ready within a day. It was not kept. Send it again, and tell your administrator if it stays.`,
+    );
+    if (isRefused) await clearArrival(upload, false);
+  }
+}
+
 /** Folders of a worker that was killed. */
 async function clearWorkFolders(before: Date): Promise<void> {
   for (const name of await readdir(tmpdir())) {
@@ -60,6 +77,7 @@ export const tidyUploadsJob: JobHandler = {
       .from(uploads)
       .where(and(eq(uploads.state, "sending"), lt(uploads.changedAt, before)));
     for (const upload of old) await giveUp(upload, before);
+    await refuseStuck(new Date(now - DAY_MS));
     await clearWorkFolders(new Date(now - DAY_MS));
     await scheduleTidy(new Date(now + DAY_MS));
   },

@@ -18,7 +18,7 @@ export default async function ImagesPage({ params }: Props) {
   const standing = pictures.filter((picture) => picture.withdrawnBecause === null);
   const uncalibrated = standing.filter((picture) => picture.pixelText === null).length;
   return (
-    <div className="grid gap-4">
+    <>
       <PageHeader
         title="Images"
         note={
@@ -27,28 +27,30 @@ export default async function ImagesPage({ params }: Props) {
             : undefined
         }
       />
-      <AddPictures caseId={caseId} items={items} disabledReason={mayNotAdd} />
-      {pictures.length === 0 ? (
-        <EmptyState title="No pictures yet">
-          A picture opens at full size on the bench, where its scale is set and features are
-          measured. Choose or drop the first one above.
-        </EmptyState>
-      ) : (
-        <ul
-          aria-label="Pictures"
-          className="grid grid-cols-[repeat(auto-fill,minmax(15rem,1fr))] gap-3"
-        >
-          {pictures.map((picture) => (
-            <PictureCard
-              key={picture.id}
-              caseId={caseId}
-              picture={picture}
-              items={items}
-              mayDescribe={mayDescribe}
-            />
-          ))}
-        </ul>
-      )}
-    </div>
+      <div className="grid gap-4 px-4 pb-4">
+        <AddPictures caseId={caseId} items={items} disabledReason={mayNotAdd} />
+        {pictures.length === 0 ? (
+          <EmptyState title="No pictures yet">
+            A picture opens at full size on the bench, where its scale is set and features are
+            measured. Choose or drop the first one above.
+          </EmptyState>
+        ) : (
+          <ul
+            aria-label="Pictures"
+            className="grid grid-cols-[repeat(auto-fill,minmax(15rem,1fr))] gap-3"
+          >
+            {pictures.map((picture) => (
+              <PictureCard
+                key={picture.id}
+                caseId={caseId}
+                picture={picture}
+                items={items}
+                mayDescribe={mayDescribe}
+              />
+            ))}
+          </ul>
+        )}
+      </div>
+    </>
   );
 }
