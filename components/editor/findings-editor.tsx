@@ -1,0 +1,391 @@
+"use client";
+
+import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { type Content, EditorContent, useEditor } from "@tiptap/react";
+import type { Chart } from "@/lib/charts/primitives";
+import { Button } from "@/components/ui/button";
+import { LinkButton } from "@/components/ui/link-button";
+import { Notice } from "@/components/ui/notice";
+import { CHART_FIGURE, CITED_VALUE, type DocumentNode, FIGURE } from "@/lib/findings/document";
+import { ROOT_CAUSE_MAX } from "@/lib/findings/document-schema";
+import { formatTime } from "@/lib/format/dates";
+import { routes } from "@/lib/routes";
+import { CitePanel, type CitableValue } from "./cite-panel";
+import { ConflictView } from "./conflict-view";
+import { TEXT_EXTENSIONS } from "./extensions";
+import { type CitedLook, FindingsProvider } from "./findings-context";
+import { SHOWN_PARTS } from "./part-views";
+import { PickDialog } from "./pick-dialog";
+import { SavingLine } from "./saving-line";
+import { StalePanel, type StaleValue } from "./stale-panel";
+import { Toolbar } from "./toolbar";
+import { type Draft, keptDraft, useDraftSaving } from "./use-draft-saving";
+import { flaggedPhrases } from "./flagged-phrases";
+import { FlaggedPanel } from "./flagged-panel";
+
+type CitedState = CitedLook & { recordId: string; versionId: string; field: string };
+
+export type FindingsEditorProps = {
+  caseId: string;
+  caseNumber: string;
+  issueNumber: number;
+  revision: number;
+  document: DocumentNode;
+  rootCause: string;
+  savedAt: string | null;
+  citable: CitableValue[];
+  cited: CitedState[];
+  pictures: { id: string; label: string; caption: string }[];
+  traverses: { id: string; label: string; name: string; chart: Chart }[];
+  refusal: string | null;
+};
+
+const CURRENT: CitedLook = { state: "current", now: null };
+const keyOf = (recordId: string, versionId: string, field: string) =>
+  `${recordId}/${versionId}/${field}`;
+
+/** The findings as a sheet of paper, with what can be cited beside it. */
+export function FindingsEditor(props: FindingsEditorProps) {
+  const { caseId, citable, pictures, traverses, refusal } = props;
+  const isReadOnly = refusal !== null;
+  const storageKey = `riverline.findings.${caseId}.${props.issueNumber}`;
+  const search = useRef<HTMLInputElement>(null);
+  const [cited, setCited] = useState(props.cited);
+  const [picking, setPicking] = useState<"picture" | "chart" | null>(null);
+  const [rootCause, setRootCause] = useState(props.rootCause);
+  const [kept, setKept] = useState<ReturnType<typeof keptDraft>>(null);
+  const [, setTick] = useState(0);
+  const draft = useRef<Draft>({ document: props.document, rootCause: props.rootCause });
+
+  const read = useCallback(() => draft.current, []);
+  const saving = useDraftSaving<CitedState[]>({
+    caseId,
+    storageKey,
+    revision: props.revision,
+    savedAt: props.savedAt,
+    read,
+    onSaved: setCited,
+  });
+  const { changed, saveNow } = saving;
+
+  const editor = useEditor({
+    immediatelyRender: false,
+    editable: !isReadOnly,
+    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS],
+    content: props.document as Content,
+    editorProps: {
+      attributes: {
+        "aria-label": "Findings",
+        class: "findings-text raw outline-none",
+        role: "textbox",
+        "aria-multiline": "true",
+      },
+      handleKeyDown: (_view, event) => {
+        if (event.key !== "@" || isReadOnly) return false;
+        event.preventDefault();
+        search.current?.focus();
+        return true;
+      },
+    },
+    onUpdate: ({ editor: e }) => {
+      draft.current = { ...draft.current, document: e.getJSON() };
+      setTick((n) => n + 1);
+      changed();
+    },
+  });
+
+  useEffect(() => {
+    if (isReadOnly) return;
+    const copy = keptDraft(storageKey);
+    // Read once after the page is there: the server cannot know what this device keeps.
+    if (copy) queueMicrotask(() => setKept(copy));
+  }, [storageKey, isReadOnly]);
+
+  const looks = useMemo(
+    () =>
+      new Map(cited.map((state) => [keyOf(state.recordId, state.versionId, state.field), state])),
+    [cited],
+  );
+  const sources = useMemo(
+    () => ({
+      citedLook: (recordId: string, versionId: string, field: string) =>
+        looks.get(keyOf(recordId, versionId, field)) ?? CURRENT,
+      picture: (imageId: string) => pictures.find((picture) => picture.id === imageId) ?? null,
+      chart: (traverseId: string) =>
+        traverses.find((traverse) => traverse.id === traverseId) ?? null,
+    }),
+    [looks, pictures, traverses],
+  );
+
+  const stale: StaleValue[] = [];
+  editor?.state.doc.descendants((node, position) => {
+    if (node.type.name !== CITED_VALUE || node.attrs.keptReason) return;
+    const look = looks.get(keyOf(node.attrs.recordId, node.attrs.versionId, node.attrs.field));
+    if (look?.state === "stale" && look.now)
+      stale.push({
+        position,
+        tag: String(node.attrs.tag),
+        cited: String(node.attrs.text),
+        now: look.now,
+      });
+  });
+
+  const setAttributes = (position: number, attributes: Record<string, unknown>) =>
+    editor
+      ?.chain()
+      .command(({ tr }) => {
+        const node = tr.doc.nodeAt(position);
+        if (!node) return false;
+        tr.setNodeMarkup(position, undefined, { ...node.attrs, ...attributes });
+        return true;
+      })
+      .run();
+  const show = (position: number) =>
+    editor?.chain().setNodeSelection(position).focus().scrollIntoView().run();
+
+  function cite(value: CitableValue) {
+    const { recordId, versionId, field, text, tag } = value;
+    editor
+      ?.chain()
+      .focus()
+      .insertContent([
+        { type: CITED_VALUE, attrs: { recordId, versionId, field, text, tag } },
+        { type: "text", text: " " },
+      ])
+      .run();
+  }
+
+  function replaceText(next: Draft) {
+    draft.current = next;
+    setRootCause(next.rootCause);
+    editor?.commands.setContent(next.document as Content, { emitUpdate: false });
+    setTick((n) => n + 1);
+  }
+
+  const { state } = saving;
+  return (
+    <FindingsProvider value={sources}>
+      <div
+        className="grid min-h-full xl:grid-cols-[minmax(0,1fr)_20rem]"
+        onKeyDown={(event) => {
+          if ((event.ctrlKey || event.metaKey) && event.key === "s") {
+            event.preventDefault();
+            saveNow();
+          }
+          if (event.altKey && event.key === "ArrowDown" && stale[0]) {
+            event.preventDefault();
+            const from = editor?.state.selection.from ?? 0;
+            show((stale.find((value) => value.position > from) ?? stale[0]).position);
+          }
+        }}
+      >
+        <div className="min-w-0 bg-desk">
+          {editor && !isReadOnly && (
+            <Toolbar
+              editor={editor}
+              onCite={() => search.current?.focus()}
+              onFigure={() => setPicking("picture")}
+              onChart={() => setPicking("chart")}
+            />
+          )}
+          <div className="grid gap-2 px-4 pt-3">
+            <div className="flex flex-wrap items-center justify-between gap-3">
+              <h1 className="text-16 font-head">
+                Findings{" "}
+                <span className="text-13 font-normal text-ink-2">issue {props.issueNumber}</span>
+              </h1>
+              <span className="flex items-center gap-3">
+                <SavingLine state={state} />
+                <LinkButton
+                  small
+                  href={routes.api.draftPdf(caseId)}
+                  prefetch={false}
+                  target="_blank"
+                >
+                  Print the draft
+                </LinkButton>
+              </span>
+            </div>
+            {refusal && (
+              <Notice kind="readonly" title="Read only">
+                {refusal}
+              </Notice>
+            )}
+            {state.kind === "offline" && (
+              <Notice kind="offline" title="No connection" live="polite">
+                You can go on; what you write is kept on this device and sent when the connection is
+                back.
+              </Notice>
+            )}
+            {state.kind === "signed-out" && (
+              <Notice
+                kind="bad"
+                title="You are signed out"
+                live="assertive"
+                actions={
+                  <LinkButton small href={routes.signIn(routes.findings(caseId))} target="_blank">
+                    Sign in in a new window
+                  </LinkButton>
+                }
+              >
+                Your text is kept on this page and on this device. Sign in, come back, and press
+                Ctrl S.
+              </Notice>
+            )}
+            {state.kind === "refused" && (
+              <Notice
+                kind="bad"
+                title="Findings were not saved"
+                live="assertive"
+                actions={
+                  <Button small onClick={() => changed()}>
+                    Try again
+                  </Button>
+                }
+              >
+                {state.message}
+              </Notice>
+            )}
+            {kept && (
+              <Notice
+                kind="warn"
+                title={`Text kept on this device from ${formatTime(kept.at)} was never saved`}
+                actions={
+                  <>
+                    <Button
+                      small
+                      onClick={() => {
+                        localStorage.removeItem(storageKey);
+                        setKept(null);
+                      }}
+                    >
+                      Forget it
+                    </Button>
+                    <Button
+                      small
+                      look="primary"
+                      onClick={() => {
+                        replaceText(kept);
+                        setKept(null);
+                        changed();
+                      }}
+                    >
+                      Put it back
+                    </Button>
+                  </>
+                }
+              >
+                {kept.revision === props.revision
+                  ? "It goes on from the text below."
+                  : "The text below has been changed since."}
+              </Notice>
+            )}
+          </div>
+          {state.kind === "conflict" && (
+            <ConflictView
+              conflict={state.conflict}
+              onKeepMine={() => saving.overrule(state.conflict.theirs.revision)}
+              onTakeTheirs={() => {
+                replaceText(state.conflict.theirs);
+                saving.yieldTo(state.conflict.theirs.revision);
+              }}
+            />
+          )}
+          <div className="mx-auto my-4 max-w-sheet bg-paper px-6 py-10 text-paper-ink sm:px-18">
+            <p className="flex justify-between border-b border-paper-rule pb-2 text-12 text-paper-ink-2">
+              <span className="font-mono">{props.caseNumber}</span>
+              <span>Findings, issue {props.issueNumber}, not signed</span>
+            </p>
+            <label className="mt-6 block text-13 font-head" htmlFor="root-cause">
+              Root cause, in one sentence
+            </label>
+            <textarea
+              id="root-cause"
+              rows={2}
+              maxLength={ROOT_CAUSE_MAX}
+              readOnly={isReadOnly}
+              className="raw mt-1 w-full resize-y border-l-3 border-action bg-transparent pl-4 font-serif text-sheet"
+              placeholder="What failed, by which mechanism, from where, and why."
+              value={rootCause}
+              onChange={(event) => {
+                setRootCause(event.target.value);
+                draft.current = { ...draft.current, rootCause: event.target.value };
+                changed();
+              }}
+            />
+            <EditorContent editor={editor} />
+          </div>
+        </div>
+        <aside
+          aria-label="Beside the text"
+          className="border-l border-rule-2 bg-surface xl:sticky xl:top-[6.5rem] xl:max-h-[calc(100dvh-6.5rem)] xl:overflow-y-auto"
+        >
+          <StalePanel
+            stale={stale}
+            isReadOnly={isReadOnly}
+            onShow={show}
+            onTake={(value) =>
+              setAttributes(value.position, {
+                versionId: value.now.versionId,
+                text: value.now.text,
+                keptReason: null,
+              })
+            }
+            onKeep={(value, keptReason) => setAttributes(value.position, { keptReason })}
+          />
+          <CitePanel
+            values={citable}
+            search={search}
+            isReadOnly={isReadOnly}
+            onCite={cite}
+            onLeave={() => editor?.commands.focus()}
+          />
+          {editor && <FlaggedPanel phrases={flaggedPhrases(`${rootCause}\n${editor.getText()}`)} />}
+        </aside>
+      </div>
+      <PickDialog
+        title="Put in a picture"
+        none="No picture of this case is ready yet."
+        choices={pictures.map(({ id, label, caption }) => ({
+          id,
+          label,
+          words: caption,
+          picture: routes.api.thumbnail(id),
+        }))}
+        isOpen={picking === "picture"}
+        onOpenChange={(open) => setPicking(open ? "picture" : null)}
+        onPick={(imageId) => {
+          const caption = pictures.find((picture) => picture.id === imageId)?.caption ?? "";
+          editor
+            ?.chain()
+            .focus()
+            .insertContent({ type: FIGURE, attrs: { imageId, caption, withMarks: true } })
+            .run();
+          setPicking(null);
+        }}
+      />
+      <PickDialog
+        title="Put in a chart"
+        none="No traverse is recorded yet."
+        choices={traverses.map(({ id, label, name }) => ({ id, label, words: name }))}
+        isOpen={picking === "chart"}
+        onOpenChange={(open) => setPicking(open ? "chart" : null)}
+        onPick={(traverseId) => {
+          const traverse = traverses.find((known) => known.id === traverseId);
+          editor
+            ?.chain()
+            .focus()
+            .insertContent({
+              type: CHART_FIGURE,
+              attrs: {
+                traverseId,
+                caption: `Hardness against depth, ${traverse?.label ?? ""} ${traverse?.name ?? ""}. Bars are expanded uncertainty, k = 2.`,
+              },
+            })
+            .run();
+          setPicking(null);
+        }}
+      />
+    </FindingsProvider>
+  );
+}
