@@ -1,18 +1,5 @@
 import "server-only";
-import {
-  and,
-  asc,
-  between,
-  desc,
-  eq,
-  gt,
-  inArray,
-  like,
-  lt,
-  or,
-  type SQL,
-  sql,
-} from "drizzle-orm";
+import { and, asc, between, desc, eq, gt, inArray, like, lt, or, type SQL, sql } from "drizzle-orm";
 import { alias } from "drizzle-orm/mysql-core";
 import { database } from "@/db/client";
 import { cases, organisations, people } from "@/db/schema";
