@@ -1,13 +1,14 @@
 "use client";
 
+import type { DraftConflict } from "@/components/forms/use-draft-saving";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";
 import { type DocumentNode, plainTextOf } from "@/lib/findings/document";
 import { SECTIONS } from "@/lib/findings/sections";
 import { formatTime } from "@/lib/format/dates";
-import type { DraftConflict } from "./use-draft-saving";
+import type { Draft } from "./draft";
 
-type Props = { conflict: DraftConflict; onKeepMine: () => void; onTakeTheirs: () => void };
+type Props = { conflict: DraftConflict<Draft>; onKeepMine: () => void; onTakeTheirs: () => void };
 
 /** Text of each section, in the order of the report. */
 function sectionTexts(document: DocumentNode): Map<string, string> {

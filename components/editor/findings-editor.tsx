@@ -10,16 +10,17 @@ import { CHART_FIGURE, CITED_VALUE, type DocumentNode, FIGURE } from "@/lib/find
 import { ROOT_CAUSE_MAX } from "@/lib/findings/document-schema";
 import { formatTime } from "@/lib/format/dates";
 import { routes } from "@/lib/routes";
+import { keptDraft, type KeptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
 import { CitePanel, type CitableValue } from "./cite-panel";
 import { ConflictView } from "./conflict-view";
 import { TEXT_EXTENSIONS } from "./extensions";
 import { type CitedLook, FindingsProvider } from "./findings-context";
 import { SHOWN_PARTS } from "./part-views";
 import { PickDialog } from "./pick-dialog";
-import { SavingLine } from "./saving-line";
+import { SavingLine } from "@/components/forms/saving-line";
 import { StalePanel, type StaleValue } from "./stale-panel";
 import { Toolbar } from "./toolbar";
-import { type Draft, keptDraft, useDraftSaving } from "./use-draft-saving";
+import type { Draft } from "./draft";
 import { flaggedPhrases } from "./flagged-phrases";
 import { FlaggedPanel } from "./flagged-panel";
 
@@ -40,6 +41,8 @@ export type FindingsEditorProps = {
   refusal: string | null;
 };
 
+type SavedFindings = { revision: number; savedAt: string; cited: CitedState[] };
+
 const CURRENT: CitedLook = { state: "current", now: null };
 const keyOf = (recordId: string, versionId: string, field: string) =>
   `${recordId}/${versionId}/${field}`;
@@ -53,18 +56,18 @@ export function FindingsEditor(props: FindingsEditorProps) {
   const [cited, setCited] = useState(props.cited);
   const [picking, setPicking] = useState<"picture" | "chart" | null>(null);
   const [rootCause, setRootCause] = useState(props.rootCause);
-  const [kept, setKept] = useState<ReturnType<typeof keptDraft>>(null);
+  const [kept, setKept] = useState<KeptDraft<Draft> | null>(null);
   const [, setTick] = useState(0);
   const draft = useRef<Draft>({ document: props.document, rootCause: props.rootCause });
 
   const read = useCallback(() => draft.current, []);
-  const saving = useDraftSaving<CitedState[]>({
-    caseId,
+  const saving = useDraftSaving<Draft, SavedFindings>({
+    url: routes.api.findings(caseId),
     storageKey,
     revision: props.revision,
     savedAt: props.savedAt,
     read,
-    onSaved: setCited,
+    onSaved: useCallback((saved: SavedFindings) => setCited(saved.cited), []),
   });
   const { changed, saveNow } = saving;
 
@@ -96,7 +99,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
 
   useEffect(() => {
     if (isReadOnly) return;
-    const copy = keptDraft(storageKey);
+    const copy = keptDraft<Draft>(storageKey, "document");
     // Read once after the page is there: the server cannot know what this device keeps.
     if (copy) queueMicrotask(() => setKept(copy));
   }, [storageKey, isReadOnly]);

@@ -1,46 +1,46 @@
 "use client";
 
 import { useCallback, useEffect, useRef, useState } from "react";
-import { routes } from "@/lib/routes";
 
-export type Draft = { document: unknown; rootCause: string };
-export type DraftConflict = {
-  yours: Draft;
-  theirs: Draft & { revision: number };
+/** Two states of a draft of kind `D`, when two people saved. */
+export type DraftConflict<D> = {
+  yours: D;
+  theirs: D & { revision: number };
   changedBy: string;
   changedAt: string;
 };
-export type SavingState =
+export type SavingState<D> =
   | { kind: "saved"; at: string | null }
   | { kind: "waiting" }
   | { kind: "saving" }
   | { kind: "offline" }
   | { kind: "signed-out" }
   | { kind: "refused"; message: string }
-  | { kind: "conflict"; conflict: DraftConflict };
+  | { kind: "conflict"; conflict: DraftConflict<D> };
 
-type Saved<C> = { revision: number; savedAt: string; cited: C };
-type Kept = { revision: number; at: string } & Draft;
+type Saved = { revision: number; savedAt: string };
+export type KeptDraft<D> = { revision: number; at: string } & D;
 
 const SAVE_AFTER_MS = 1_500;
 const TRY_AGAIN_MS = 5_000;
 
 /** Saves a draft as it is typed, keeps a copy on the device until the server has it, and tells how it stands. */
-export function useDraftSaving<C>(options: {
-  caseId: string;
+export function useDraftSaving<D extends object, S extends Saved>(options: {
+  /** Takes PUT with the revision seen and the draft. */
+  url: string;
   storageKey: string;
   revision: number;
   savedAt: string | null;
-  read: () => Draft;
-  onSaved: (cited: C) => void;
+  read: () => D;
+  onSaved?: (saved: S) => void;
 }) {
-  const { caseId, storageKey, read, onSaved } = options;
+  const { url, storageKey, read, onSaved } = options;
   const revision = useRef(options.revision);
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
   const isSending = useRef(false);
   const isDirty = useRef(false);
   const sender = useRef<() => Promise<void>>(() => Promise.resolve());
-  const [state, setState] = useState<SavingState>({ kind: "saved", at: options.savedAt });
+  const [state, setState] = useState<SavingState<D>>({ kind: "saved", at: options.savedAt });
 
   const send = useCallback(async () => {
     if (isSending.current || !isDirty.current) return;
@@ -53,15 +53,15 @@ export function useDraftSaving<C>(options: {
       timer.current = setTimeout(() => void sender.current(), TRY_AGAIN_MS);
     };
     try {
-      const answer = await fetch(routes.api.findings(caseId), {
+      const answer = await fetch(url, {
         method: "PUT",
         headers: { "content-type": "application/json" },
         body: JSON.stringify({ revision: revision.current, ...draft }),
       });
       if (answer.ok) {
-        const saved: Saved<C> = await answer.json();
+        const saved: S = await answer.json();
         revision.current = saved.revision;
-        onSaved(saved.cited);
+        onSaved?.(saved);
         if (!isDirty.current) {
           localStorage.removeItem(storageKey);
           setState({ kind: "saved", at: saved.savedAt });
@@ -85,7 +85,7 @@ export function useDraftSaving<C>(options: {
       if (isDirty.current && timer.current === undefined)
         timer.current = setTimeout(() => void sender.current(), SAVE_AFTER_MS);
     }
-  }, [caseId, onSaved, read, storageKey]);
+  }, [onSaved, read, storageKey, url]);
 
   useEffect(() => {
     sender.current = send;
@@ -93,7 +93,11 @@ export function useDraftSaving<C>(options: {
 
   const changed = useCallback(() => {
     isDirty.current = true;
-    const kept: Kept = { revision: revision.current, at: new Date().toISOString(), ...read() };
+    const kept: KeptDraft<D> = {
+      revision: revision.current,
+      at: new Date().toISOString(),
+      ...read(),
+    };
     localStorage.setItem(storageKey, JSON.stringify(kept));
     setState((now) =>
       now.kind === "conflict" || now.kind === "signed-out" ? now : { kind: "waiting" },
@@ -146,12 +150,12 @@ export function useDraftSaving<C>(options: {
 }
 
 /** A copy on this device that the server never got; null when there is none. */
-export function keptDraft(storageKey: string): Kept | null {
+export function keptDraft<D>(storageKey: string, member: keyof D & string): KeptDraft<D> | null {
   const text = localStorage.getItem(storageKey);
   if (text === null) return null;
   try {
-    const kept: Kept = JSON.parse(text);
-    return typeof kept === "object" && kept !== null && "document" in kept ? kept : null;
+    const kept: KeptDraft<D> = JSON.parse(text);
+    return typeof kept === "object" && kept !== null && member in kept ? kept : null;
   } catch {
     localStorage.removeItem(storageKey);
     return null;

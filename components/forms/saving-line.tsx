@@ -2,7 +2,7 @@ import { formatTime } from "@/lib/format/dates";
 import type { SavingState } from "./use-draft-saving";
 
 /** How the draft stands, in one line. */
-export function SavingLine({ state }: { state: SavingState }) {
+export function SavingLine({ state }: { state: SavingState<object> }) {
   const words = (() => {
     switch (state.kind) {
       case "saved":
