@@ -4,7 +4,8 @@ import type { Transaction } from "@/db/client";
 import { people, organisations, requestFiles } from "@/db/schema";
 import { transaction } from "@/db/transaction";
 import { recordEvent } from "@/lib/audit/record";
-import { decide } from "@/lib/auth/policy";
+import { requireAllowed } from "@/lib/auth/require";
+import { AppError } from "@/lib/errors";
 import { findCase } from "@/lib/cases/subject";
 import { touchCase } from "@/lib/cases/write-case";
 import { keepOriginal, keepPicture, markTaken } from "@/lib/images/keep-picture";
@@ -39,11 +40,15 @@ async function stillAllowed(tx: Transaction, upload: UploadRow): Promise<void> {
     .innerJoin(organisations, eq(organisations.id, people.organisationId))
     .where(eq(people.id, upload.byId));
   if (!loaded || !actor) throw new Error(`upload ${upload.id} has no case or nobody sent it`);
-  const decision = decide(actor, UPLOAD_ACTION[upload.purpose], loaded.subject);
-  if (decision.allowed) return;
-  throw new FileRefusal(
-    `${upload.fileName} came too late to be added. ${decision.says} The file was not kept.`,
-  );
+  try {
+    requireAllowed(actor, UPLOAD_ACTION[upload.purpose], loaded.subject);
+  } catch (error) {
+    if (!(error instanceof AppError)) throw error;
+    throw new FileRefusal(
+      `${upload.fileName} came too late to be added. ${error.message} The file was not kept.`,
+      { cause: error },
+    );
+  }
 }
 
 async function keepRequestFile(
