@@ -12,8 +12,11 @@ import { FileRefusal } from "@/lib/uploads/file-refusal";
 
 const LOOKED_AT_BYTES = 1024;
 
-/** What a file without a known signature looks like, for the words of a refusal. */
-async function describeUnknown(file: string): Promise<string> {
+/**
+ * What a file without a known signature looks like, for the words of a refusal.
+ * @throws FileRefusal for a TIFF that is cut short
+ */
+async function describeUnknown(file: string, fileName: string): Promise<string> {
   const handle = await open(file);
   try {
     const { buffer, bytesRead } = await handle.read(
@@ -24,6 +27,12 @@ async function describeUnknown(file: string): Promise<string> {
     );
     const start = buffer.subarray(0, bytesRead).toString("utf8").toLowerCase();
     if (bytesRead === 0) return "empty";
+    // Its directory often stands last, and without it a TIFF is not known as one.
+    if (/^(II\*\0|MM\0\*)/.test(buffer.toString("latin1", 0, 4))) {
+      throw new FileRefusal(
+        `${fileName} is damaged or ends too early. It was not kept. Copy it again from its source and send it again.`,
+      );
+    }
     if (start.includes("<svg")) return "an SVG drawing";
     if (start.includes("<!doctype html") || start.includes("<html")) return "a web page";
     return "not a file of a known type";
@@ -47,7 +56,7 @@ export async function inspectFile(
   if (!type) {
     const named = found && found.ext !== "xml" ? `a file of type ${found.ext.toUpperCase()}` : null;
     throw new FileRefusal(
-      `${fileName} is ${named ?? (await describeUnknown(file))}, not a ${rule.says}. It was not kept. Save it as one of these and send it again.`,
+      `${fileName} is ${named ?? (await describeUnknown(file, fileName))}, not a ${rule.says}. It was not kept. Save it as one of these and send it again.`,
     );
   }
   const promised = promisedType(fileName);
