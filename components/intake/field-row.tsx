@@ -68,7 +68,7 @@ export const FieldRow = memo(function FieldRow({
           field.need === "optional" ? null : (
             <select
               aria-label={`${field.label}: how it is answered`}
-              className="max-w-32 bg-transparent text-12 text-ink-3"
+              className="w-18 shrink-0 bg-transparent text-12 text-ink-3"
               value={kind}
               onChange={(event) => {
                 const next = KINDS.find((known) => known === event.target.value) ?? "value";

@@ -20,6 +20,7 @@ import { describeEvent } from "@/lib/audit/describe-event";
 import { type CaseState, HOLD_NAMES, PRIORITY_NAMES } from "./constants";
 import { type Gate, gateLedger } from "./gates";
 import { getCase } from "./get-case";
+import type { SeenAssignment } from "./schemas";
 import { visibleCases } from "./visible";
 
 export type OverviewMove = { to: CaseState; at: string };
@@ -46,6 +47,8 @@ export type CaseOverview = {
   };
   priority: string | null;
   dueOn: string | null;
+  /** The seats of the case as they stand. */
+  assignment: SeenAssignment;
   endReason: string | null;
   gates: Gate[];
   quotes: OverviewQuote[];
@@ -106,7 +109,10 @@ async function quotesOf(caseId: string): Promise<OverviewQuote[]> {
       const n = shown.get(strand) ?? 0;
       if (n >= QUOTES_PER_STRAND) return [];
       shown.set(strand, n + 1);
-      const tag = row.scope ? `${row.label} · ${row.scope}` : row.label.replace(/^R(?=\d)/, "T");
+      const tag =
+        row.scope && row.kind === "mark"
+          ? `${row.label} · ${row.scope}`
+          : row.label.replace(/^R(?=\d)/, "T");
       return [
         {
           strand,
@@ -204,6 +210,14 @@ export async function caseOverview(actor: Actor, caseId: string): Promise<CaseOv
     },
     priority: row.priority ? PRIORITY_NAMES[row.priority] : null,
     dueOn: row.dueOn,
+    assignment: {
+      priority: row.priority,
+      leadId: row.leadId,
+      investigatorId: row.investigatorId,
+      secondReaderId: row.secondReaderId,
+      technicianIds: [...subject.technicianIds],
+      dueOn: row.dueOn,
+    },
     endReason: row.endReason,
     gates: seesWork ? gates : [],
     quotes,

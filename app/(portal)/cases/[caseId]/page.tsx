@@ -3,6 +3,7 @@ import Link from "next/link";
 import { Panel, PanelHead } from "@/components/ui/panel";
 import { decide } from "@/lib/auth/policy";
 import { caseOverview } from "@/lib/cases/case-overview";
+import { seatChoices } from "@/lib/cases/seat-choices";
 import { orNotFound, pageActor } from "@/lib/http/page";
 import { routes } from "@/lib/routes";
 import { redirect } from "next/navigation";
@@ -13,6 +14,7 @@ import { ProgressPanel } from "./_components/progress-panel";
 import { QuestionsPanel } from "./_components/questions-panel";
 import { ReportPanel } from "./_components/report-panel";
 import { StandingNotices } from "./_components/standing-notices";
+import { TriagePanel } from "./_components/triage-panel";
 import { StrandsPanel } from "./_components/strands-panel";
 
 export const metadata: Metadata = { title: "Overview" };
@@ -25,6 +27,18 @@ export default async function OverviewPage({ params }: { params: Promise<{ caseI
   const may = (action: Parameters<typeof decide>[1]) =>
     decide(actor, action, overview.subject).allowed;
   const seesWork = may("case.viewWork");
+  const rights = {
+    accept: may("case.accept"),
+    askBack: may("case.askBack"),
+    decline: may("case.decline"),
+    cancel: may("case.cancel"),
+    assign: may("case.assign"),
+    hold: may("case.hold"),
+    clearHold: may("case.clearHold"),
+  };
+  const seats = rights.assign
+    ? await seatChoices()
+    : { lead: [], investigator: [], secondReader: [], technician: [] };
   const now = new Date();
   return (
     <div className="p-4">
@@ -46,6 +60,7 @@ export default async function OverviewPage({ params }: { params: Promise<{ caseI
           {overview.issues.length > 0 && (
             <ReportPanel overview={overview} mayRead={may("report.read")} />
           )}
+          <TriagePanel overview={overview} rights={rights} seats={seats} />
           {seesWork && <GatePanel gates={overview.gates} signOffHref={routes.signOff(caseId)} />}
           {may("case.viewHistory") ? (
             <ActivityPanel

@@ -2,8 +2,7 @@
 
 import { revalidatePath } from "next/cache";
 import { answerQuestion } from "@/lib/cases/answer-question";
-import { cancelCase } from "@/lib/cases/cancel-case";
-import { AnswerQuestionInput, CancelCaseInput, SubmitCaseInput } from "@/lib/cases/schemas";
+import { AnswerQuestionInput, SubmitCaseInput } from "@/lib/cases/schemas";
 import { submitCase } from "@/lib/cases/submit-case";
 import { action } from "@/lib/http/action";
 import { routes } from "@/lib/routes";
@@ -23,13 +22,5 @@ export const sendAnswer = action(
     const answered = await answerQuestion(actor, input);
     revalidatePath(routes.case(input.caseId), "layout");
     return answered;
-  },
-);
-
-export const cancelRequest = action(
-  { permission: "case.cancel", input: CancelCaseInput },
-  async (actor, input) => {
-    await cancelCase(actor, input);
-    revalidatePath(routes.case(input.caseId), "layout");
   },
 );
