@@ -1,0 +1,144 @@
+"use client";
+
+import type { BenchMark } from "@/lib/images/bench-state";
+import { markPath } from "@/lib/images/mark-layout";
+import { type Geometry, pointsOf } from "@/lib/images/mark-schemas";
+import type { Point } from "@/lib/imaging/point";
+import { MarkPoints, MarkShape } from "./mark-shape";
+import { MarkTag } from "./mark-tag";
+import { toPicture, toScreen, type View } from "./view";
+
+type Props = {
+  view: View;
+  marks: readonly BenchMark[];
+  chosenId: string | null;
+  /** Shape of the chosen mark while its points are moved; null otherwise. */
+  edited: Geometry | null;
+  drawn: { shape: Geometry | null; points: readonly Point[] };
+  /** Cross for marking by keys; null while the mouse is used. */
+  cross: Point | null;
+  canChoose: boolean;
+  onChoose: (id: string) => void;
+  onMovePoint: (index: number, to: Point) => void;
+};
+
+/** Marks over the picture: shapes in its pixels, labels and handles in those of the screen. */
+export function MarkLayer({
+  view,
+  marks,
+  chosenId,
+  edited,
+  drawn,
+  cross,
+  canChoose,
+  onChoose,
+  onMovePoint,
+}: Props) {
+  const shown = marks.map((mark) => ({
+    mark,
+    geometry: mark.id === chosenId && edited ? edited : mark.content.geometry,
+    isChosen: mark.id === chosenId,
+  }));
+  const crossAt = cross && toScreen(cross, view);
+  return (
+    <svg className="pointer-events-none absolute inset-0 size-full" aria-hidden="true">
+      <g transform={`translate(${view.x} ${view.y}) scale(${view.scale})`}>
+        {shown.map(({ mark, geometry, isChosen }) => (
+          <g key={mark.id}>
+            <MarkShape geometry={geometry} strong={isChosen} />
+            {canChoose && (
+              <path
+                d={markPath(geometry)}
+                fill="none"
+                stroke="transparent"
+                strokeWidth={14}
+                vectorEffect="non-scaling-stroke"
+                className="pointer-events-auto cursor-pointer"
+                onPointerDown={(event) => {
+                  event.stopPropagation();
+                  onChoose(mark.id);
+                }}
+              />
+            )}
+          </g>
+        ))}
+        {drawn.shape && <MarkShape geometry={drawn.shape} strong />}
+        {!drawn.shape && drawn.points.length > 1 && (
+          <path
+            d={`M${drawn.points.map(([x, y]) => `${x} ${y}`).join("L")}`}
+            fill="none"
+            stroke="#fff"
+            strokeWidth={1.8}
+            strokeDasharray="4 3"
+            vectorEffect="non-scaling-stroke"
+          />
+        )}
+      </g>
+      {shown.map(({ mark, geometry, isChosen }) => (
+        <g key={mark.id}>
+          <MarkPoints geometry={geometry} view={view} />
+          <MarkTag
+            caption={mark.caption}
+            tool={mark.content.tool}
+            geometry={geometry}
+            view={view}
+            strong={isChosen}
+          />
+        </g>
+      ))}
+      {drawn.points.map((point, i) => {
+        const [x, y] = toScreen(point, view);
+        return (
+          <rect
+            key={i}
+            x={x - 4}
+            y={y - 4}
+            width={8}
+            height={8}
+            fill="#000"
+            stroke="#fff"
+            strokeWidth={1.6}
+          />
+        );
+      })}
+      {edited &&
+        pointsOf(edited).map((point, i) => {
+          const [x, y] = toScreen(point, view);
+          return (
+            <rect
+              key={i}
+              x={x - 7}
+              y={y - 7}
+              width={14}
+              height={14}
+              fill="#000"
+              stroke="#fff"
+              strokeWidth={2}
+              className="pointer-events-auto cursor-move"
+              onPointerDown={(event) => {
+                event.stopPropagation();
+                event.currentTarget.setPointerCapture(event.pointerId);
+              }}
+              onPointerMove={(event) => {
+                if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
+                const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
+                if (box)
+                  onMovePoint(
+                    i,
+                    toPicture([event.clientX - box.left, event.clientY - box.top], view),
+                  );
+              }}
+            />
+          );
+        })}
+      {crossAt && (
+        <path
+          d={`M${crossAt[0] - 14} ${crossAt[1]}h28M${crossAt[0]} ${crossAt[1] - 14}v28`}
+          stroke="#fff"
+          strokeWidth={1.6}
+          style={{ filter: "drop-shadow(0 0 1px #000)" }}
+        />
+      )}
+    </svg>
+  );
+}
