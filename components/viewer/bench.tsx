@@ -174,10 +174,9 @@ export function Bench({ picture, first, film, chosenId: firstChosen, acts }: Pro
     host,
     isReady ? routes.api.imageInfo(picture.id) : null,
     MARGINS,
-    (at, isDouble) => {
-      if (!view) return;
+    (at, isDouble, pressed) => {
       setCross(null);
-      setPoint(ontoPicture(toPicture(at, view), size), isDouble, view.scale);
+      setPoint(ontoPicture(toPicture(at, pressed), size), isDouble, pressed.scale);
     },
   );
 

@@ -31,7 +31,7 @@ export function useDeepZoom(
   element: RefObject<HTMLElement | null>,
   infoUrl: string | null,
   margins: PanelMargins,
-  onPress: (at: Point, isDouble: boolean) => void,
+  onPress: (at: Point, isDouble: boolean, view: View) => void,
 ): DeepZoom {
   const viewer = useRef<Viewer | null>(null);
   const press = useRef(onPress);
@@ -66,12 +66,20 @@ export function useDeepZoom(
         gestureSettingsPen: { clickToZoom: false, dblClickToZoom: false },
       });
       viewer.current = made;
-      const tell = () => {
+      const look = (): View | null => {
         const image = made.world.getItemAt(0);
-        if (!image) return;
+        if (!image) return null;
         const zero = image.imageToViewerElementCoordinates(new openSeadragon.Point(0, 0));
         const far = image.imageToViewerElementCoordinates(new openSeadragon.Point(1000, 0));
-        const next = { scale: (far.x - zero.x) / 1000, x: zero.x, y: zero.y };
+        return { scale: (far.x - zero.x) / 1000, x: zero.x, y: zero.y };
+      };
+      const pressed = (x: number, y: number, isDouble: boolean) => {
+        const now = look();
+        if (now) press.current([x, y], isDouble, now);
+      };
+      const tell = () => {
+        const next = look();
+        if (!next) return;
         setView((now) =>
           now && now.scale === next.scale && now.x === next.x && now.y === next.y ? now : next,
         );
@@ -81,10 +89,10 @@ export function useDeepZoom(
       }
       made.addHandler("open-failed", () => setHasFailed(true));
       made.addHandler("canvas-click", (event) => {
-        if (event.quick) press.current([event.position.x, event.position.y], false);
+        if (event.quick) pressed(event.position.x, event.position.y, false);
       });
       made.addHandler("canvas-double-click", (event) => {
-        press.current([event.position.x, event.position.y], true);
+        pressed(event.position.x, event.position.y, true);
       });
     };
     open().catch(() => setHasFailed(true));
