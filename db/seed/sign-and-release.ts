@@ -88,16 +88,14 @@ export async function closeCase(cast: Cast, caseId: string, daysAgo: number): Pr
       .update(cases)
       .set({ state: "closed", stage: STAGE_OF_STATE.closed, changedAt: new Date() })
       .where(eq(cases.id, caseId));
-    await tx
-      .insert(caseMoves)
-      .values({
-        id: newId("move"),
-        caseId,
-        fromState: "released",
-        toState: "closed",
-        reason: "Items returned",
-        byId: cast.lead.id,
-      });
+    await tx.insert(caseMoves).values({
+      id: newId("move"),
+      caseId,
+      fromState: "released",
+      toState: "closed",
+      reason: "Items returned",
+      byId: cast.lead.id,
+    });
     await recordEvent(tx, {
       caseId,
       actor: null,

@@ -15,7 +15,7 @@ export function TableRows({ table }: { table: HardnessTable }) {
       <thead>
         <tr>
           {scales.map((scale) => (
-            <Th key={scale} numeric title={SCALES[scale].name}>
+            <Th key={scale} numeric className="text-right!" title={SCALES[scale].name}>
               {scale.replace("_MPa", ", MPa").replace("_ksi", ", ksi").replace("_", " ")}
             </Th>
           ))}
