@@ -31,9 +31,8 @@ export function ToolBar({ tool, mayMark, mayScale, isCalibrated, onTool }: Props
           title={`${TOOL_WORDS[known]} (${TOOL_KEYS[known].toUpperCase()})`}
           onClick={() => onTool(known)}
           className={classNames(
-            "grid h-12 place-items-center gap-0 rounded-3 pt-1 text-11 text-ib-ink-2",
-            tool === known && "bg-ib-ink font-strong text-black",
-            known === "scale" && !isCalibrated && tool !== known && "text-ib-origin",
+            "grid h-12 place-items-center gap-0 rounded-3 pt-1 text-11",
+            colours(tool === known, known === "scale" && !isCalibrated),
           )}
         >
           <ToolIcon tool={known} />
@@ -42,4 +41,9 @@ export function ToolBar({ tool, mayMark, mayScale, isCalibrated, onTool }: Props
       ))}
     </div>
   );
+}
+
+function colours(isChosen: boolean, isMissed: boolean): string {
+  if (isChosen) return "bg-ib-ink font-strong text-black";
+  return isMissed ? "text-ib-origin" : "text-ib-ink-2";
 }

@@ -20,6 +20,9 @@ import { setRealTime, setStoryTime } from "./clock";
 import { DEMO_PASSWORD } from "./people";
 import { secondReaderOf } from "./reach";
 
+/** How long storing the report took, in the story. */
+const RELEASED_AFTER_MS = 90_000;
+
 /** Sends the findings to the second reader, and has them read. */
 export async function haveRead(
   cast: Cast,
@@ -51,6 +54,7 @@ export async function signAndRelease(
   setStoryTime(daysAgo, "15:40");
   await sendForSignOff(cast[story.investigator], { caseId });
   setStoryTime(Math.max(daysAgo - 1, 0), "10:14");
+  const signedAt = new Date();
   const issue = await findIssue(database(), caseId);
   if (!issue) throw new Error("no issue to sign");
   const signInId = await startSignIn({ id: cast.lead.id, signInEpoch: 1 });
@@ -66,7 +70,7 @@ export async function signAndRelease(
   await storeReportJob.run({ issueId: issue.id });
   await database()
     .update(reportIssues)
-    .set({ releasedAt: new Date(Date.now() - Math.max(daysAgo - 1, 0) * 86_400_000) })
+    .set({ releasedAt: new Date(signedAt.getTime() + RELEASED_AFTER_MS) })
     .where(eq(reportIssues.id, issue.id));
 }
 

@@ -17,9 +17,9 @@ export const HUE_OF_TOOL: Record<MarkTool, MarkHue> = {
   note: "origin",
 };
 
-/** Point half way along a line. */
-export function midpointOf(points: readonly Point[]): Point {
-  const half = polylineLengthPx(points) / 2;
+/** Point half way along a line, or at another share of its length. */
+export function midpointOf(points: readonly Point[], along = 0.5): Point {
+  const half = polylineLengthPx(points) * along;
   let walked = 0;
   for (const [i, to] of points.entries()) {
     const from = points[i - 1];
@@ -51,6 +51,8 @@ export function labelPlace(geometry: Geometry): LabelPlace {
     case "ratchet":
       return { at: geometry.lines[0]?.[0] ?? [0, 0], side: "left" };
     case "front":
+      // Lengths are drawn across the middle of fronts, so a front's label keeps off it.
+      return { at: midpointOf(geometry.points, 0.3), side: "over" };
     case "length":
       return { at: midpointOf(geometry.points), side: "over" };
     case "area":

@@ -12,7 +12,7 @@ type Props = {
 
 const WIDTH = 724;
 const INSET = 14;
-const LABEL_MIN = 84;
+const LABEL_MIN = 104;
 
 /** The stages a case went through, each as wide as the days it took, with today and the due date. */
 export function ProgressPanel({ moves, dueOn, lead, now }: Props) {

@@ -39,7 +39,7 @@ export default async function SignOffPage({ params }: { params: Promise<{ caseId
           ) : null
         }
       />
-      <div className="grid gap-4 px-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
+      <div className="grid items-start gap-4 px-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
         <div className="grid min-w-0 content-start gap-3.5">
           {isSigned && issue && (
             <StoringNotice

@@ -27,6 +27,7 @@ export function ProblemList({
         {listed.map((field) => (
           <li key={field.key}>
             <a
+              className="block min-h-6 py-0.5"
               href={`#${field.key}`}
               onClick={(event) => {
                 event.preventDefault();
