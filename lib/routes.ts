@@ -44,7 +44,8 @@ export const routes = {
     original: (imageId: string) => `/api/images/${imageId}/original`,
     imageState: (caseId: string) => `/api/cases/${caseId}/images`,
     marks: (imageId: string) => `/api/images/${imageId}/marks`,
-    figure: (imageId: string) => `/api/images/${imageId}/figure`,
+    figure: (imageId: string, withMarks = true) =>
+      `/api/images/${imageId}/figure${withMarks ? "" : "?marks=none"}`,
     fieldReturnDraft: (caseId: string) => `/api/cases/${caseId}/field-return`,
     findings: (caseId: string) => `/api/cases/${caseId}/findings`,
     draftPdf: (caseId: string) => `/api/cases/${caseId}/draft.pdf`,

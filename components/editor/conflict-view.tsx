@@ -21,6 +21,14 @@ function sectionTexts(document: DocumentNode): Map<string, string> {
   return texts;
 }
 
+function copyText({ document, rootCause }: Draft): Promise<void> {
+  const texts = sectionTexts(document as DocumentNode);
+  const sections = SECTIONS.filter(({ key }) => texts.get(key)).map(
+    ({ key, title }) => `${title}\n\n${texts.get(key)}`,
+  );
+  return navigator.clipboard.writeText([rootCause, ...sections].join("\n\n"));
+}
+
 /** Two people saved: both texts side by side where they differ, and the choice. Nothing is lost. */
 export function ConflictView({ conflict, onKeepMine, onTakeTheirs }: Props) {
   const mine = sectionTexts(conflict.yours.document as DocumentNode);
@@ -34,6 +42,9 @@ export function ConflictView({ conflict, onKeepMine, onTakeTheirs }: Props) {
         live="assertive"
         actions={
           <>
+            <Button small look="quiet" onClick={() => void copyText(conflict.yours)}>
+              Copy my text
+            </Button>
             <Button small onClick={onTakeTheirs}>
               Take theirs
             </Button>
@@ -44,7 +55,7 @@ export function ConflictView({ conflict, onKeepMine, onTakeTheirs }: Props) {
         }
       >
         {conflict.changedBy} saved at {formatTime(conflict.changedAt)}, after you opened them. Your
-        text is kept here and on this device. Every saved state stays in the history.
+        text is kept here and on this device. If you take theirs, Undo brings yours back.
       </Notice>
       <div className="mt-3 grid gap-3">
         {conflict.yours.rootCause !== conflict.theirs.rootCause && (

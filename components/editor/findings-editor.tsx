@@ -1,28 +1,32 @@
 "use client";
 
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { flushSync } from "react-dom";
 import { type Content, EditorContent, useEditor } from "@tiptap/react";
 import type { Chart } from "@/lib/charts/primitives";
 import { Button } from "@/components/ui/button";
 import { LinkButton } from "@/components/ui/link-button";
-import { Notice } from "@/components/ui/notice";
+import { classNames } from "@/components/ui/class-names";
 import { CHART_FIGURE, CITED_VALUE, type DocumentNode, FIGURE } from "@/lib/findings/document";
 import { ROOT_CAUSE_MAX } from "@/lib/findings/document-schema";
-import { formatTime } from "@/lib/format/dates";
 import { routes } from "@/lib/routes";
 import { keptDraft, type KeptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
 import { CitePanel, type CitableValue } from "./cite-panel";
 import { ConflictView } from "./conflict-view";
-import { TEXT_EXTENSIONS } from "./extensions";
+import { TEXT_EXTENSIONS } from "@/lib/findings/extensions";
 import { type CitedLook, FindingsProvider } from "./findings-context";
 import { SHOWN_PARTS } from "./part-views";
 import { PickDialog } from "./pick-dialog";
 import { SavingLine } from "@/components/forms/saving-line";
-import { StalePanel, type StaleValue } from "./stale-panel";
+import { StalePanel } from "./stale-panel";
+import { WithdrawnPanel } from "./withdrawn-panel";
 import { Toolbar } from "./toolbar";
 import type { Draft } from "./draft";
+import { EditorNotices, KeptNotice } from "./editor-notices";
 import { flaggedPhrases } from "./flagged-phrases";
 import { FlaggedPanel } from "./flagged-panel";
+import { KeepSections } from "./keep-sections";
+import { unsettledValues } from "./unsettled-values";
 
 type CitedState = CitedLook & { recordId: string; versionId: string; field: string };
 
@@ -57,7 +61,9 @@ export function FindingsEditor(props: FindingsEditorProps) {
   const [picking, setPicking] = useState<"picture" | "chart" | null>(null);
   const [rootCause, setRootCause] = useState(props.rootCause);
   const [kept, setKept] = useState<KeptDraft<Draft> | null>(null);
-  const [, setTick] = useState(0);
+  // Counts changes since the last saved state; what stands beside the text follows it.
+  const [changes, setChanges] = useState(0);
+  const [isRailOpen, setRailOpen] = useState(false);
   const draft = useRef<Draft>({ document: props.document, rootCause: props.rootCause });
 
   const read = useCallback(() => draft.current, []);
@@ -67,14 +73,22 @@ export function FindingsEditor(props: FindingsEditorProps) {
     revision: props.revision,
     savedAt: props.savedAt,
     read,
-    onSaved: useCallback((saved: SavedFindings) => setCited(saved.cited), []),
+    onSaved: useCallback((saved: SavedFindings) => {
+      setCited(saved.cited);
+      setChanges(0);
+    }, []),
   });
-  const { changed, saveNow } = saving;
+  const { changed, saveNow, state } = saving;
+  const openSearch = () => {
+    // On a narrow screen the list is closed until it is asked for, and a closed one takes no focus.
+    flushSync(() => setRailOpen(true));
+    search.current?.focus();
+  };
 
   const editor = useEditor({
     immediatelyRender: false,
     editable: !isReadOnly,
-    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS],
+    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS, KeepSections],
     content: props.document as Content,
     editorProps: {
       attributes: {
@@ -86,13 +100,13 @@ export function FindingsEditor(props: FindingsEditorProps) {
       handleKeyDown: (_view, event) => {
         if (event.key !== "@" || isReadOnly) return false;
         event.preventDefault();
-        search.current?.focus();
+        openSearch();
         return true;
       },
     },
     onUpdate: ({ editor: e }) => {
       draft.current = { ...draft.current, document: e.getJSON() };
-      setTick((n) => n + 1);
+      setChanges((n) => n + 1);
       changed();
     },
   });
@@ -120,20 +134,11 @@ export function FindingsEditor(props: FindingsEditorProps) {
     [looks, pictures, traverses],
   );
 
-  const stale: StaleValue[] = [];
-  editor?.state.doc.descendants((node, position) => {
-    if (node.type.name !== CITED_VALUE || node.attrs.keptReason) return;
-    const look = looks.get(keyOf(node.attrs.recordId, node.attrs.versionId, node.attrs.field));
-    if (look?.state === "stale" && look.now)
-      stale.push({
-        position,
-        tag: String(node.attrs.tag),
-        cited: String(node.attrs.text),
-        now: look.now,
-      });
-  });
+  const { stale, withdrawn } = editor
+    ? unsettledValues(editor, sources.citedLook, citable)
+    : { stale: [], withdrawn: [] };
 
-  const setAttributes = (position: number, attributes: Record<string, unknown>) =>
+  const setCitation = (position: number, attributes: Record<string, unknown>) =>
     editor
       ?.chain()
       .command(({ tr }) => {
@@ -148,6 +153,8 @@ export function FindingsEditor(props: FindingsEditorProps) {
 
   function cite(value: CitableValue) {
     const { recordId, versionId, field, text, tag } = value;
+    // At once, so that what is typed next lands in the text and not in the search.
+    editor?.view.focus();
     editor
       ?.chain()
       .focus()
@@ -156,16 +163,22 @@ export function FindingsEditor(props: FindingsEditorProps) {
         { type: "text", text: " " },
       ])
       .run();
+    setRailOpen(false);
+  }
+
+  function leaveSearch(written?: string) {
+    setRailOpen(false);
+    editor?.view.focus();
+    if (written) editor?.commands.insertContent(written);
   }
 
   function replaceText(next: Draft) {
     draft.current = next;
     setRootCause(next.rootCause);
     editor?.commands.setContent(next.document as Content, { emitUpdate: false });
-    setTick((n) => n + 1);
+    setChanges((n) => n + 1);
   }
 
-  const { state } = saving;
   return (
     <FindingsProvider value={sources}>
       <div
@@ -173,6 +186,8 @@ export function FindingsEditor(props: FindingsEditorProps) {
         onKeyDown={(event) => {
           if ((event.ctrlKey || event.metaKey) && event.key === "s") {
             event.preventDefault();
+            // After a refusal or a lost sign-in nothing waits to be sent until it is touched again.
+            if (state.kind === "signed-out" || state.kind === "refused") changed();
             saveNow();
           }
           if (event.altKey && event.key === "ArrowDown" && stale[0]) {
@@ -186,7 +201,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
           {editor && !isReadOnly && (
             <Toolbar
               editor={editor}
-              onCite={() => search.current?.focus()}
+              onCite={openSearch}
               onFigure={() => setPicking("picture")}
               onChart={() => setPicking("chart")}
             />
@@ -199,6 +214,16 @@ export function FindingsEditor(props: FindingsEditorProps) {
               </h1>
               <span className="flex items-center gap-3">
                 <SavingLine state={state} />
+                <Button
+                  small
+                  className="xl:hidden"
+                  aria-expanded={isRailOpen}
+                  onClick={() => setRailOpen(!isRailOpen)}
+                >
+                  {stale.length + withdrawn.length > 0
+                    ? `Values, ${stale.length + withdrawn.length} to settle`
+                    : "Values"}
+                </Button>
                 <LinkButton
                   small
                   href={routes.api.draftPdf(caseId)}
@@ -209,79 +234,27 @@ export function FindingsEditor(props: FindingsEditorProps) {
                 </LinkButton>
               </span>
             </div>
-            {refusal && (
-              <Notice kind="readonly" title="Read only">
-                {refusal}
-              </Notice>
-            )}
-            {state.kind === "offline" && (
-              <Notice kind="offline" title="No connection" live="polite">
-                You can go on; what you write is kept on this device and sent when the connection is
-                back.
-              </Notice>
-            )}
-            {state.kind === "signed-out" && (
-              <Notice
-                kind="bad"
-                title="You are signed out"
-                live="assertive"
-                actions={
-                  <LinkButton small href={routes.signIn(routes.findings(caseId))} target="_blank">
-                    Sign in in a new window
-                  </LinkButton>
-                }
-              >
-                Your text is kept on this page and on this device. Sign in, come back, and press
-                Ctrl S.
-              </Notice>
-            )}
-            {state.kind === "refused" && (
-              <Notice
-                kind="bad"
-                title="Findings were not saved"
-                live="assertive"
-                actions={
-                  <Button small onClick={() => changed()}>
-                    Try again
-                  </Button>
-                }
-              >
-                {state.message}
-              </Notice>
-            )}
+            <EditorNotices
+              refusal={refusal}
+              state={state}
+              changes={changes}
+              signInHref={routes.signIn(routes.findings(caseId))}
+              onTryAgain={changed}
+            />
             {kept && (
-              <Notice
-                kind="warn"
-                title={`Text kept on this device from ${formatTime(kept.at)} was never saved`}
-                actions={
-                  <>
-                    <Button
-                      small
-                      onClick={() => {
-                        localStorage.removeItem(storageKey);
-                        setKept(null);
-                      }}
-                    >
-                      Forget it
-                    </Button>
-                    <Button
-                      small
-                      look="primary"
-                      onClick={() => {
-                        replaceText(kept);
-                        setKept(null);
-                        changed();
-                      }}
-                    >
-                      Put it back
-                    </Button>
-                  </>
-                }
-              >
-                {kept.revision === props.revision
-                  ? "It goes on from the text below."
-                  : "The text below has been changed since."}
-              </Notice>
+              <KeptNotice
+                kept={kept}
+                isSameRevision={kept.revision === props.revision}
+                onForget={() => {
+                  localStorage.removeItem(storageKey);
+                  setKept(null);
+                }}
+                onPutBack={() => {
+                  replaceText(kept);
+                  setKept(null);
+                  changed();
+                }}
+              />
             )}
           </div>
           {state.kind === "conflict" && (
@@ -321,27 +294,44 @@ export function FindingsEditor(props: FindingsEditorProps) {
         </div>
         <aside
           aria-label="Beside the text"
-          className="border-l border-rule-2 bg-surface xl:sticky xl:top-[6.5rem] xl:max-h-[calc(100dvh-6.5rem)] xl:overflow-y-auto"
+          className={classNames(
+            "overflow-y-auto border-l border-rule-2 bg-surface xl:sticky xl:top-[6.5rem] xl:max-h-[calc(100dvh-6.5rem)]",
+            isRailOpen
+              ? "max-xl:fixed max-xl:top-[6.5rem] max-xl:right-0 max-xl:bottom-0 max-xl:z-20 max-xl:w-80 max-xl:shadow-lift-2"
+              : "max-xl:hidden",
+          )}
         >
           <StalePanel
             stale={stale}
             isReadOnly={isReadOnly}
             onShow={show}
-            onTake={(value) =>
-              setAttributes(value.position, {
-                versionId: value.now.versionId,
-                text: value.now.text,
-                keptReason: null,
-              })
+            onTake={(values) => {
+              for (const { position, now } of values)
+                setCitation(position, {
+                  versionId: now.versionId,
+                  text: now.text,
+                  keptReason: null,
+                });
+            }}
+            onKeep={(value, keptReason) => setCitation(value.position, { keptReason })}
+          />
+          <WithdrawnPanel
+            withdrawn={withdrawn}
+            isReadOnly={isReadOnly}
+            onShow={show}
+            onTakeOut={(position) =>
+              editor
+                ?.chain()
+                .deleteRange({ from: position, to: position + 1 })
+                .run()
             }
-            onKeep={(value, keptReason) => setAttributes(value.position, { keptReason })}
           />
           <CitePanel
             values={citable}
             search={search}
             isReadOnly={isReadOnly}
             onCite={cite}
-            onLeave={() => editor?.commands.focus()}
+            onLeave={leaveSearch}
           />
           {editor && <FlaggedPanel phrases={flaggedPhrases(`${rootCause}\n${editor.getText()}`)} />}
         </aside>

@@ -4,7 +4,7 @@ import { NodeViewWrapper, type ReactNodeViewProps, ReactNodeViewRenderer } from 
 import { SvgChart } from "@/components/charts/svg-chart";
 import { CitedChip } from "@/components/ui/cited-chip";
 import { routes } from "@/lib/routes";
-import { ChartFigure, CitedValue, Figure, SectionHeading } from "./extensions";
+import { ChartFigure, CitedValue, Figure, SectionHeading } from "@/lib/findings/extensions";
 import { useFindingsSources } from "./findings-context";
 
 const text = (props: ReactNodeViewProps, name: string) => String(props.node.attrs[name] ?? "");
@@ -21,19 +21,25 @@ function SectionView(props: ReactNodeViewProps) {
   );
 }
 
+const said = (value: string) => value.replace("±", "plus or minus").replace("≈", "about");
+
 function CitedView(props: ReactNodeViewProps) {
   const { citedLook } = useFindingsSources();
   const look = citedLook(text(props, "recordId"), text(props, "versionId"), text(props, "field"));
   const cited = text(props, "text");
-  const isStale = look.state === "stale" && look.now !== null;
+  const tag = text(props, "tag");
+  const hasChanged = look.state === "stale" || look.state === "kept";
+  const state = hasChanged ? (text(props, "keptReason") ? "kept" : "stale") : look.state;
+  const now = state === "stale" && look.now?.text !== cited ? look.now?.text : undefined;
   return (
-    <NodeViewWrapper as="span" data-state={look.state}>
+    <NodeViewWrapper as="span" data-state={state}>
       <CitedChip
         paper
-        state={look.state}
-        source={text(props, "tag")}
-        value={isStale ? (look.now?.text ?? cited) : cited}
-        {...(isStale && { was: cited })}
+        state={state}
+        source={tag}
+        value={now ?? cited}
+        spoken={`${said(cited)}, from ${tag}${state === "current" ? "" : `, ${state}`}${now ? `, now ${said(now)}` : ""}`}
+        {...(now && { was: cited })}
       />
     </NodeViewWrapper>
   );
@@ -45,13 +51,25 @@ function Caption(props: ReactNodeViewProps) {
       aria-label="Caption"
       rows={2}
       maxLength={500}
-      className="raw w-full resize-y bg-transparent text-13 text-paper-ink outline-offset-2"
+      className="raw w-full resize-y bg-transparent font-sans text-13 text-paper-ink outline-offset-2"
       placeholder="Caption: item, place on the part, what is shown, technique"
       value={text(props, "caption")}
       onChange={(event) => props.updateAttributes({ caption: event.target.value })}
     />
   ) : (
-    <p className="raw text-13">{text(props, "caption")}</p>
+    <p className="raw font-sans text-13">{text(props, "caption")}</p>
+  );
+}
+
+/** "Figure 3" as the report will number it, and what it shows. */
+function FigureNumber({ label, children }: { label?: string; children?: React.ReactNode }) {
+  return (
+    <p className="flex items-baseline gap-3 font-sans text-13">
+      <span className="figure-number font-strong" />
+      <span className="font-mono text-12 text-paper-ink-2">{label}</span>
+      <span className="grow" />
+      {children}
+    </p>
   );
 }
 
@@ -59,6 +77,7 @@ function FigureView(props: ReactNodeViewProps) {
   const { picture } = useFindingsSources();
   const imageId = text(props, "imageId");
   const shown = picture(imageId);
+  const withMarks = props.node.attrs.withMarks !== false;
   return (
     <NodeViewWrapper
       as="figure"
@@ -69,7 +88,7 @@ function FigureView(props: ReactNodeViewProps) {
         // The picture is drawn by the server with its marks, behind the session's cookie.
         // eslint-disable-next-line @next/next/no-img-element
         <img
-          src={routes.api.figure(imageId)}
+          src={routes.api.figure(imageId, withMarks)}
           alt={`${shown.label} ${shown.caption}`}
           className="w-full"
           loading="lazy"
@@ -78,7 +97,18 @@ function FigureView(props: ReactNodeViewProps) {
         <p className="border border-bad-mark p-3 text-13 text-bad">This picture was withdrawn.</p>
       )}
       <figcaption className="mt-2">
-        <span className="font-mono text-12 text-paper-ink-2">{shown?.label}</span>
+        <FigureNumber label={shown?.label}>
+          {props.editor.isEditable && (
+            <label className="inline-flex items-center gap-1.5 text-12 text-paper-ink-2">
+              <input
+                type="checkbox"
+                checked={withMarks}
+                onChange={(event) => props.updateAttributes({ withMarks: event.target.checked })}
+              />
+              Marks drawn in
+            </label>
+          )}
+        </FigureNumber>
         <Caption {...props} />
       </figcaption>
     </NodeViewWrapper>
@@ -100,7 +130,7 @@ function ChartView(props: ReactNodeViewProps) {
         <p className="border border-bad-mark p-3 text-13 text-bad">This traverse was withdrawn.</p>
       )}
       <figcaption className="mt-2">
-        <span className="font-mono text-12 text-paper-ink-2">{shown?.label}</span>
+        <FigureNumber label={shown?.label} />
         <Caption {...props} />
       </figcaption>
     </NodeViewWrapper>

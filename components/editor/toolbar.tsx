@@ -9,6 +9,8 @@ import {
   List,
   ListOrdered,
   Redo2,
+  Subscript,
+  Superscript,
   Table as TableIcon,
   Undo2,
 } from "lucide-react";
@@ -18,9 +20,11 @@ import { Select } from "@/components/ui/select";
 
 const STYLES = [
   { value: "0", label: "Section text" },
-  { value: "2", label: "Heading" },
-  { value: "3", label: "Small heading" },
+  { value: "1", label: "Heading" },
+  { value: "2", label: "Smaller heading" },
+  { value: "3", label: "Smallest heading" },
 ];
+const LEVELS = [1, 2, 3] as const;
 
 type Props = { editor: Editor; onCite: () => void; onFigure: () => void; onChart: () => void };
 
@@ -29,13 +33,11 @@ export function Toolbar({ editor, onCite, onFigure, onChart }: Props) {
   const now = useEditorState({
     editor,
     selector: ({ editor: e }) => ({
-      level: e.isActive("heading", { level: 2 })
-        ? "2"
-        : e.isActive("heading", { level: 3 })
-          ? "3"
-          : "0",
+      level: String(LEVELS.find((level) => e.isActive("heading", { level })) ?? 0),
       bold: e.isActive("bold"),
       italic: e.isActive("italic"),
+      subscript: e.isActive("subscript"),
+      superscript: e.isActive("superscript"),
       bullets: e.isActive("bulletList"),
       numbers: e.isActive("orderedList"),
       inTable: e.isActive("table"),
@@ -75,11 +77,8 @@ export function Toolbar({ editor, onCite, onFigure, onChart }: Props) {
           aria-label="Kind of text"
           value={now.level}
           onChange={(event) => {
-            const level = event.target.value;
-            if (level === "2" || level === "3")
-              chain()
-                .setHeading({ level: level === "2" ? 2 : 3 })
-                .run();
+            const level = LEVELS.find((known) => String(known) === event.target.value);
+            if (level) chain().setHeading({ level }).run();
             else chain().setParagraph().run();
           }}
           options={STYLES}
@@ -90,6 +89,12 @@ export function Toolbar({ editor, onCite, onFigure, onChart }: Props) {
       )}
       {tool("Italic", <Italic size={16} aria-hidden="true" />, now.italic, () =>
         chain().toggleItalic().run(),
+      )}
+      {tool("Subscript", <Subscript size={16} aria-hidden="true" />, now.subscript, () =>
+        chain().toggleMark("subscript").run(),
+      )}
+      {tool("Superscript", <Superscript size={16} aria-hidden="true" />, now.superscript, () =>
+        chain().toggleMark("superscript").run(),
       )}
       {tool("List", <List size={16} aria-hidden="true" />, now.bullets, () =>
         chain().toggleBulletList().run(),

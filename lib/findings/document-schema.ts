@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { CHART_FIGURE, CITED_VALUE, type DocumentNode, FIGURE, SECTION_HEADING } from "./document";
+import { structureProblem } from "./document-structure";
 
 export const DOCUMENT_MAX_BYTES = 2 * 1024 * 1024;
 export const DOCUMENT_MAX_NODES = 20_000;
@@ -67,7 +68,7 @@ const href = z
   .string()
   .max(2000)
   .refine(
-    (value) => /^(https?:|mailto:)/i.test(value) || /^\/(?!\/)/.test(value),
+    (value) => /^(https?:|mailto:)/i.test(value) || /^\/(?![/\\\s])/.test(value),
     "A link begins with http://, https:// or mailto:.",
   );
 
@@ -77,6 +78,8 @@ const MARK_ATTRIBUTES: Record<string, z.ZodType> = {
   underline: none,
   strike: none,
   code: none,
+  subscript: none,
+  superscript: none,
   link: z.object({ href }),
 };
 
@@ -136,18 +139,19 @@ function withoutEmpty(
 }
 
 function isDocument(value: unknown): value is DocumentNode {
-  return (
-    documentProblem(value) === null && z.object({ type: z.literal("doc") }).safeParse(value).success
-  );
+  return z.object({ type: z.literal("doc") }).safeParse(value).success;
 }
 
-/** A whole findings document, every node, mark and attribute of a known kind. */
+/** A whole findings document, every node, mark and attribute of a known kind and in its place. */
 export const findingsDocument = z.unknown().transform((value, context): DocumentNode => {
-  if (isDocument(value)) return value;
-  context.addIssue({
-    code: "custom",
-    message: documentProblem(value) ?? "This is not a findings document.",
-  });
+  const problem = documentProblem(value);
+  if (problem === null && isDocument(value)) {
+    const misplaced = structureProblem(value);
+    if (misplaced === null) return value;
+    context.addIssue({ code: "custom", message: misplaced });
+    return z.NEVER;
+  }
+  context.addIssue({ code: "custom", message: problem ?? "This is not a findings document." });
   return z.NEVER;
 });
 

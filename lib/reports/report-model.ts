@@ -4,7 +4,7 @@ import { formatDate } from "@/lib/format/dates";
 import { AppError } from "@/lib/errors";
 import type { FrozenReport } from "./frozen-report";
 import { STANDARD_CAUTIONS } from "./pdf/cautions";
-import type { ResolvedFigure } from "./pdf/document-resolver";
+import type { DocumentResolver } from "./pdf/document-resolver";
 import type {
   Block,
   ReportModel,
@@ -138,7 +138,7 @@ function keptNotes(frozen: FrozenReport): Block[] {
 export async function reportModelOf(
   frozen: FrozenReport,
   how: {
-    figure: (imageId: string) => Promise<ResolvedFigure>;
+    figure: DocumentResolver["figure"];
     fingerprint: string | null;
     draftRevision: number | null;
   },

@@ -9,7 +9,7 @@ export type ResolvedFigure = Pick<FigureBlock, "image" | "widthPx" | "heightPx" 
 
 /** Brings in what a findings document only points at. Each throws when it is not there. */
 export type DocumentResolver = {
-  figure(imageId: string): Promise<ResolvedFigure>;
+  figure(imageId: string, options: { withMarks: boolean }): Promise<ResolvedFigure>;
   chart(traverseId: string): Promise<Chart>;
   /** The value as it is printed; left out, the text kept in the document is. */
   citedValue?(node: CitedValueNode): Promise<string>;

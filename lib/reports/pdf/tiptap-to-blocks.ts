@@ -95,7 +95,9 @@ async function blockOf(
     case "table":
       return tableBlock(node, resolver);
     case FIGURE: {
-      const figure = await resolver.figure(text(node, "imageId"));
+      const figure = await resolver.figure(text(node, "imageId"), {
+        withMarks: node.attrs?.withMarks !== false,
+      });
       const number = numbering.nextFigure++;
       return { kind: "figure", number, ...figure, caption: [{ text: text(node, "caption") }] };
     }
