@@ -99,9 +99,10 @@ function FigureView(props: ReactNodeViewProps) {
       <figcaption className="mt-2">
         <FigureNumber label={shown?.label}>
           {props.editor.isEditable && (
-            <label className="inline-flex items-center gap-1.5 text-12 text-paper-ink-2">
+            <label className="inline-flex min-h-6 items-center gap-1.5 text-12 text-paper-ink-2">
               <input
                 type="checkbox"
+                className="m-1 size-6"
                 checked={withMarks}
                 onChange={(event) => props.updateAttributes({ withMarks: event.target.checked })}
               />

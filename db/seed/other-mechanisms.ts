@@ -52,7 +52,12 @@ const BY_NUMBER: Record<number, readonly StoryMechanism[]> = {
   ],
   131: [
     { code: "HC", detail: "in torsion, from the inner side", verdict: "open", reason: "" },
-    { code: "CF", detail: "from a pit under the paint", verdict: "open", reason: "" },
+    {
+      code: "CF",
+      detail: "from a pit under the paint",
+      verdict: "weighed_out",
+      reason: "The paint is whole over the origin and no pit lies under it.",
+    },
   ],
   134: [
     {

@@ -15,12 +15,9 @@ it("keeps a field return as it is typed, and says what is missing before it is s
   await page.getByRole("heading", { name: "New field return" }).waitFor();
   const address = page.url();
   const name = page.getByRole("textbox", { name: "Part", exact: false }).first();
+  const saved = page.waitForResponse((answer) => answer.request().method() === "PUT");
   await name.fill("Winch pawl");
-  await name.blur();
-  await page
-    .getByText(/^Saved/)
-    .first()
-    .waitFor();
+  expect((await saved).status()).toBe(200);
   await page.getByRole("button", { name: "Send to the laboratory" }).click();
   await page.getByRole("complementary", { name: "Help" }).getByRole("link").first().waitFor();
   expect(page.url()).toBe(address);

@@ -42,7 +42,7 @@ it("goes from the second reading to a signed and released report, and locks the 
   await lead.page.getByLabel("I did not make the measurements this rests on.").check();
   await lead.page.getByLabel("Your password").fill("not the password");
   await lead.page.getByRole("button", { name: "Sign and lock" }).click();
-  await lead.page.getByText("Nothing was signed").waitFor();
+  await lead.page.getByText("Nothing was signed", { exact: true }).waitFor();
 
   await lead.page.getByLabel("Your password").fill(DEMO_PASSWORD);
   await lead.page.getByRole("button", { name: "Sign and lock" }).click();
