@@ -239,7 +239,7 @@ export function PasteGrid(props: PasteGridProps) {
         {isReadOnly ? null : (
           <p>
             Row {content.readings.length + 1}: type or paste. <Kbd>Tab</Kbd> next, <Kbd>Enter</Kbd>{" "}
-            down, <Kbd>Ctrl</Kbd> <Kbd>V</Kbd> paste a block.
+            down, <Kbd>Ctrl</Kbd> <Kbd>V</Kbd> block.
           </p>
         )}
         <div className="ml-auto">{props.acts}</div>

@@ -1,3 +1,4 @@
+import { formatNumber } from "@/lib/format/numbers";
 import { converterFor, type Conversion, type Converter } from "@/lib/hardness/convert";
 import type { MaterialGroup } from "@/lib/hardness/material-groups";
 import { getTable, PUBLISHED_TABLES, type TableId } from "@/lib/hardness/published-tables";
@@ -48,12 +49,17 @@ export function conversionColumns(
   }));
 }
 
-export function convertedHardness(conversion: Conversion): ConvertedHardness {
+/** A refusal names the value it was asked for; it is shown as a report writes it. */
+export function convertedHardness(conversion: Conversion, asked: number): ConvertedHardness {
   return conversion.status === "ok"
     ? {
         to: conversion.to,
         value: conversion.value,
         remarks: conversion.warnings.map(({ text }) => text),
       }
-    : { to: conversion.to, value: null, remarks: [conversion.reason] };
+    : {
+        to: conversion.to,
+        value: null,
+        remarks: [conversion.reason.replace(String(asked), formatNumber(asked, { decimals: 0 }))],
+      };
 }

@@ -9,7 +9,9 @@ import { cellProblems } from "./typed-cells";
 const PROBLEMS_LISTED = 50;
 
 const convertAll = (columns: readonly ConversionColumn[], hardness: number | null) =>
-  hardness === null ? [] : columns.map(({ convert }) => convertedHardness(convert(hardness)));
+  hardness === null
+    ? []
+    : columns.map(({ convert }) => convertedHardness(convert(hardness), hardness));
 
 /** "indents 10 and 11"; null where it is about the traverse as a whole. */
 function whereText(
