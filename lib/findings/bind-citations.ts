@@ -51,7 +51,8 @@ export async function bindCitations(
   const bind = (node: DocumentNode): DocumentNode => {
     if (node.type === CITED_VALUE) {
       const source = sources.get(String(node.attrs?.versionId));
-      const quote = source?.quotes[String(node.attrs?.field)];
+      const field = String(node.attrs?.field);
+      const quote = source && Object.hasOwn(source.quotes, field) ? source.quotes[field] : null;
       if (!source || !quote || source.recordId !== node.attrs?.recordId) {
         throw new AppError(
           "INVALID",

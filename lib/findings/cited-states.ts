@@ -49,7 +49,8 @@ export async function citedStates(reader: Reader, document: DocumentNode): Promi
   const latest = new Map(rows.map((row) => [row.recordId, row]));
   return cited.map((value) => {
     const source = latest.get(value.recordId);
-    const quote = source?.quotes[value.field];
+    const quote =
+      source && Object.hasOwn(source.quotes, value.field) ? source.quotes[value.field] : null;
     const now =
       source && quote
         ? {
