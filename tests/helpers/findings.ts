@@ -1,10 +1,7 @@
 import { transaction } from "@/db/transaction";
 import { database } from "@/db/client";
-import type { Citable } from "@/lib/findings/citable-values";
 import { createFirstIssue } from "@/lib/findings/create-issue";
-import { CITED_VALUE, type DocumentNode } from "@/lib/findings/document";
 import { findIssue } from "@/lib/findings/find-issue";
-import { startingDocument } from "@/lib/findings/starting-document";
 import { createRecord, nextLabel } from "@/lib/records/write-version";
 import { asLead, asTechnician } from "./people";
 
@@ -49,29 +46,4 @@ export async function aQuotedRecord(caseId: string, text = "1.94 ± 0.05 mm") {
       { content: RESULT, quotes: depthQuotes(text) },
     ),
   );
-}
-
-/** A cited value as the editor puts it in. */
-export const cite = (
-  value: Pick<Citable, "recordId" | "versionId" | "field" | "text" | "tag">,
-): DocumentNode => ({
-  type: CITED_VALUE,
-  attrs: {
-    recordId: value.recordId,
-    versionId: value.versionId,
-    field: value.field,
-    text: value.text,
-    tag: value.tag,
-  },
-});
-
-export const words = (...parts: (string | DocumentNode)[]): DocumentNode => ({
-  type: "paragraph",
-  content: parts.map((part) => (typeof part === "string" ? { type: "text", text: part } : part)),
-});
-
-/** The sections of findings with these blocks under the first. */
-export function findingsWith(...blocks: DocumentNode[]): DocumentNode {
-  const [head, , ...rest] = startingDocument().content ?? [];
-  return { type: "doc", content: [...(head ? [head] : []), ...blocks, ...rest] };
 }

@@ -14,14 +14,8 @@ import { saveTraverse } from "@/lib/traverses/save-traverse";
 import type { TraverseContent } from "@/lib/traverses/schemas";
 import { withdrawTraverse } from "@/lib/traverses/withdraw-traverse";
 import { aCase, setState } from "../../helpers/cases";
-import {
-  aQuotedRecord,
-  cite,
-  depthQuotes,
-  findingsWith,
-  openIssue,
-  words,
-} from "../../helpers/findings";
+import { aQuotedRecord, depthQuotes, openIssue } from "../../helpers/findings";
+import { cite, findingsWith, words } from "../../helpers/findings-text";
 import { asInvestigator, asTechnician } from "../../helpers/people";
 
 /** Depth mm and hardness HV1 of a hardened layer; invented. */

@@ -11,7 +11,8 @@ import { findIssue } from "@/lib/findings/find-issue";
 import { saveFindings } from "@/lib/findings/save-findings";
 import { startingDocument } from "@/lib/findings/starting-document";
 import { aCase, setState } from "../../helpers/cases";
-import { aQuotedRecord, cite, findingsWith, openIssue, words } from "../../helpers/findings";
+import { aQuotedRecord, openIssue } from "../../helpers/findings";
+import { cite, findingsWith, words } from "../../helpers/findings-text";
 import {
   asAdministrator,
   asInvestigator,

@@ -1,0 +1,155 @@
+import { act, cleanup, renderHook } from "@testing-library/react";
+import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
+import { keptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
+
+type Draft = { document: string; rootCause: string };
+type Answer = { status: number; body: unknown } | "no connection";
+
+const KEY = "riverline.findings.case_1.1";
+let answers: Answer[];
+let sent: { revision: number; document: string }[];
+
+beforeEach(() => {
+  vi.useFakeTimers();
+  localStorage.clear();
+  answers = [];
+  sent = [];
+  vi.stubGlobal("fetch", (_url: string, init: { body: string }) => {
+    sent.push(JSON.parse(init.body));
+    const answer = answers.shift() ?? "no connection";
+    return answer === "no connection"
+      ? Promise.reject(new TypeError("Failed to fetch"))
+      : Promise.resolve(Response.json(answer.body, { status: answer.status }));
+  });
+});
+afterEach(() => {
+  cleanup();
+  vi.useRealTimers();
+  vi.unstubAllGlobals();
+});
+
+const saved = (revision: number): Answer => ({
+  status: 200,
+  body: { revision, savedAt: "2026-12-01T11:31:00Z" },
+});
+const conflict = (revision: number): Answer => ({
+  status: 409,
+  body: {
+    error: {
+      conflict: {
+        yours: { document: "mine", rootCause: "" },
+        theirs: { document: "theirs", rootCause: "", revision },
+        changedBy: "Tove Brandt",
+        changedAt: "2026-12-01T11:40:00Z",
+      },
+    },
+  },
+});
+
+function open() {
+  let document = "";
+  const read = () => ({ document, rootCause: "" });
+  const { result } = renderHook(() =>
+    useDraftSaving<Draft, { revision: number; savedAt: string }>({
+      url: "/save",
+      storageKey: KEY,
+      revision: 1,
+      savedAt: null,
+      read,
+    }),
+  );
+  return {
+    state: () => result.current.state.kind,
+    hook: () => result.current,
+    type: (text: string) =>
+      act(() => {
+        document = text;
+        result.current.changed();
+      }),
+  };
+}
+const pass = (ms: number) => act(() => vi.advanceTimersByTimeAsync(ms));
+
+describe("saving as one types", () => {
+  test("waits 1.5 s after the last key, sends once, and forgets the copy once the server has it", async () => {
+    answers = [saved(2)];
+    const page = open();
+    page.type("It");
+    await pass(1_000);
+    page.type("It broke");
+    expect(keptDraft<Draft>(KEY, "document")).toMatchObject({ document: "It broke", revision: 1 });
+    await pass(1_400);
+    expect(sent).toEqual([]);
+    await pass(200);
+    expect(sent).toMatchObject([{ revision: 1, document: "It broke" }]);
+    expect(page.state()).toBe("saved");
+    expect(keptDraft<Draft>(KEY, "document")).toBeNull();
+  });
+
+  test("goes on without a connection, and sends the newest text when it is back", async () => {
+    answers = ["no connection", "no connection", saved(2)];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    expect(page.state()).toBe("offline");
+    page.type("one two");
+    await pass(1_600);
+    expect(page.state()).toBe("offline");
+    expect(keptDraft<Draft>(KEY, "document")?.document).toBe("one two");
+    await pass(5_100);
+    expect(page.state()).toBe("saved");
+    expect(sent.at(-1)).toMatchObject({ revision: 1, document: "one two" });
+  });
+
+  test("sends at once when the browser is online again", async () => {
+    answers = ["no connection", saved(2)];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    act(() => void window.dispatchEvent(new Event("online")));
+    await pass(1);
+    expect(page.state()).toBe("saved");
+  });
+
+  test("keeps the copy when the sign-in has ended", async () => {
+    answers = [
+      { status: 401, body: { error: { code: "NOT_SIGNED_IN", message: "You are signed out." } } },
+    ];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    expect(page.state()).toBe("signed-out");
+    expect(keptDraft<Draft>(KEY, "document")?.document).toBe("one");
+  });
+
+  test("after a conflict keeps mine over theirs only when asked to", async () => {
+    answers = [conflict(5), saved(6)];
+    const page = open();
+    page.type("mine");
+    await pass(1_600);
+    expect(page.state()).toBe("conflict");
+    await pass(20_000);
+    expect(sent).toHaveLength(1);
+    act(() => page.hook().overrule(5));
+    await pass(1);
+    expect(sent.at(-1)).toMatchObject({ revision: 5, document: "mine" });
+    expect(page.state()).toBe("saved");
+  });
+
+  test("after taking theirs goes on from it, through a lost connection as well", async () => {
+    answers = [conflict(5), saved(6), "no connection", saved(7)];
+    const page = open();
+    page.type("mine");
+    await pass(1_600);
+    act(() => page.hook().yieldTo(5));
+    expect(page.state()).toBe("saved");
+    page.type("theirs and more");
+    await pass(1_600);
+    page.type("theirs and more still");
+    await pass(1_600);
+    act(() => void window.dispatchEvent(new Event("online")));
+    await pass(1);
+    expect(sent.map(({ revision }) => revision)).toEqual([1, 5, 6, 6]);
+    expect(page.state()).toBe("saved");
+  });
+});
