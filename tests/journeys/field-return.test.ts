@@ -14,7 +14,7 @@ it("keeps a field return as it is typed, and says what is missing before it is s
   await page.getByRole("button", { name: "Start the field return" }).click();
   await page.getByRole("heading", { name: "New field return" }).waitFor();
   const address = page.url();
-  const name = page.getByRole("textbox", { name: "Part", exact: false }).first();
+  const name = page.getByRole("textbox", { name: "Part", exact: true });
   const saved = page.waitForResponse((answer) => answer.request().method() === "PUT");
   await name.fill("Winch pawl");
   expect((await saved).status()).toBe(200);
@@ -23,7 +23,7 @@ it("keeps a field return as it is typed, and says what is missing before it is s
   expect(page.url()).toBe(address);
   expect(await accessProblems(page)).toEqual([]);
   await page.reload();
-  expect(await page.getByRole("textbox", { name: "Part", exact: false }).first().inputValue()).toBe(
+  expect(await page.getByRole("textbox", { name: "Part", exact: true }).inputValue()).toBe(
     "Winch pawl",
   );
   expect(faults).toEqual([]);
