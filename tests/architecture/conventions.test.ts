@@ -10,7 +10,8 @@ const all = sourceFiles("lib", "components", "app", "db", "storage-fake", "scrip
 describe("conventions", () => {
   it("nobody writes a role name outside the policy", () => {
     const names = new RegExp(`["'\`](?:${ROLES.join("|")})["'\`]`);
-    const allowed = /^(lib\/auth\/policy\.ts|lib\/people\/constants\.ts|db\/seed\/|scripts\/bench\/)/;
+    const allowed =
+      /^(lib\/auth\/policy\.ts|lib\/people\/constants\.ts|db\/seed\/|scripts\/bench\/)/;
     const faults = all
       .filter((file) => !allowed.test(file.path))
       .flatMap((file) =>
