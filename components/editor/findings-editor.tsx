@@ -173,9 +173,10 @@ export function FindingsEditor(props: FindingsEditorProps) {
   }
 
   function replaceText(next: Draft) {
-    draft.current = next;
-    setRootCause(next.rootCause);
-    editor?.commands.setContent(next.document as Content, { emitUpdate: false });
+    const { document, rootCause: cause } = next;
+    draft.current = { document, rootCause: cause };
+    setRootCause(cause);
+    editor?.commands.setContent(document as Content, { emitUpdate: false });
     setChanges((n) => n + 1);
   }
 
@@ -252,6 +253,8 @@ export function FindingsEditor(props: FindingsEditorProps) {
                 onPutBack={() => {
                   replaceText(kept);
                   setKept(null);
+                  // Goes on from what it was written on: what was saved since then shows beside it.
+                  saving.yieldTo(kept.revision);
                   changed();
                 }}
               />

@@ -56,7 +56,7 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
       const answer = await fetch(url, {
         method: "PUT",
         headers: { "content-type": "application/json" },
-        body: JSON.stringify({ revision: revision.current, ...draft }),
+        body: JSON.stringify({ ...draft, revision: revision.current }),
       });
       if (answer.ok) {
         const saved: S = await answer.json();
@@ -94,9 +94,9 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
   const changed = useCallback(() => {
     isDirty.current = true;
     const kept: KeptDraft<D> = {
+      ...read(),
       revision: revision.current,
       at: new Date().toISOString(),
-      ...read(),
     };
     localStorage.setItem(storageKey, JSON.stringify(kept));
     setState((now) =>

@@ -48,7 +48,8 @@ const conflict = (revision: number): Answer => ({
 
 function open() {
   let document = "";
-  const read = () => ({ document, rootCause: "" });
+  // A text taken over from elsewhere brings the revision of that place along.
+  const read = () => ({ document, rootCause: "", revision: 99, at: "never" });
   const { result } = renderHook(() =>
     useDraftSaving<Draft, { revision: number; savedAt: string }>({
       url: "/save",
