@@ -42,6 +42,7 @@ export type FindingsEditorProps = {
   cited: CitedState[];
   pictures: { id: string; label: string; caption: string }[];
   traverses: { id: string; label: string; name: string; chart: Chart }[];
+  isSigned: boolean;
   refusal: string | null;
 };
 
@@ -225,14 +226,20 @@ export function FindingsEditor(props: FindingsEditorProps) {
                     ? `Values, ${stale.length + withdrawn.length} to settle`
                     : "Values"}
                 </Button>
-                <LinkButton
-                  small
-                  href={routes.api.draftPdf(caseId)}
-                  prefetch={false}
-                  target="_blank"
-                >
-                  Print the draft
-                </LinkButton>
+                {props.isSigned ? (
+                  <LinkButton small href={routes.signOff(caseId)}>
+                    Signed report
+                  </LinkButton>
+                ) : (
+                  <LinkButton
+                    small
+                    href={routes.api.draftPdf(caseId)}
+                    prefetch={false}
+                    target="_blank"
+                  >
+                    Print the draft
+                  </LinkButton>
+                )}
               </span>
             </div>
             <EditorNotices
@@ -273,7 +280,9 @@ export function FindingsEditor(props: FindingsEditorProps) {
           <div className="mx-auto my-4 max-w-sheet bg-paper px-6 py-10 text-paper-ink sm:px-18">
             <p className="flex justify-between border-b border-paper-rule pb-2 text-12 text-paper-ink-2">
               <span className="font-mono">{props.caseNumber}</span>
-              <span>Findings, issue {props.issueNumber}, not signed</span>
+              <span>
+                Findings, issue {props.issueNumber}, {props.isSigned ? "signed" : "not signed"}
+              </span>
             </p>
             <label className="mt-6 block text-13 font-head" htmlFor="root-cause">
               Root cause, in one sentence
@@ -304,6 +313,11 @@ export function FindingsEditor(props: FindingsEditorProps) {
               : "max-xl:hidden",
           )}
         >
+          <p className="flex justify-end p-2 xl:hidden">
+            <Button small look="quiet" onClick={() => setRailOpen(false)}>
+              Close
+            </Button>
+          </p>
           <StalePanel
             stale={stale}
             isReadOnly={isReadOnly}

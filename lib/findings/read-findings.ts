@@ -28,6 +28,7 @@ export type FindingsPage = {
   cited: CitedState[];
   pictures: { id: string; label: string; caption: string }[];
   traverses: { id: string; label: string; name: string; chart: Chart }[];
+  isSigned: boolean;
   /** Why nothing can be written now; null when it can. */
   refusal: string | null;
 };
@@ -83,6 +84,7 @@ export async function readFindings(actor: Actor, caseId: string): Promise<Findin
         name: traverse.content.name,
         chart: chartOfTraverse(traverse, { theme: "paper" }),
       })),
+    isSigned: issue.signedAt !== null,
     refusal: decision.allowed ? null : decision.says,
   };
 }
