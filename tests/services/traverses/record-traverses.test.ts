@@ -273,11 +273,11 @@ describe("who may not", () => {
     await setState(caseId, "signed");
     const changed = { caseId, traverseId, seenVersion: 1, content: aTraverse({ name: "late" }) };
     for (const late of [
-      saveTraverse(technician, changed),
-      createTraverse(technician, { caseId, content: aTraverse() }),
-      withdrawTraverse(technician, { caseId, traverseId, reason: "late" }),
+      () => saveTraverse(technician, changed),
+      () => createTraverse(technician, { caseId, content: aTraverse() }),
+      () => withdrawTraverse(technician, { caseId, traverseId, reason: "late" }),
     ])
-      expect((await failure(late)).code).toBe("LOCKED");
+      expect((await failure(late())).code).toBe("LOCKED");
     expect(await versions(traverseId)).toHaveLength(1);
     const station = await listTraverses(await asInvestigator(), caseId);
     expect(station.refusal).toMatch(/signed/);
