@@ -2,7 +2,6 @@
 
 import { NodeViewWrapper, type ReactNodeViewProps, ReactNodeViewRenderer } from "@tiptap/react";
 import { SvgChart } from "@/components/charts/svg-chart";
-import { Checkbox } from "@/components/ui/checkbox";
 import { CitedChip } from "@/components/ui/cited-chip";
 import { routes } from "@/lib/routes";
 import { ChartFigure, CitedValue, Figure, SectionHeading } from "@/lib/findings/extensions";
@@ -100,11 +99,15 @@ function FigureView(props: ReactNodeViewProps) {
       <figcaption className="mt-2">
         <FigureNumber label={shown?.label}>
           {props.editor.isEditable && (
-            <Checkbox
-              label="Marks drawn in"
-              checked={withMarks}
-              onChange={(event) => props.updateAttributes({ withMarks: event.target.checked })}
-            />
+            <label className="inline-flex min-h-6 items-center gap-1.5 text-12 text-paper-ink-2">
+              <input
+                type="checkbox"
+                className="m-1 size-6"
+                checked={withMarks}
+                onChange={(event) => props.updateAttributes({ withMarks: event.target.checked })}
+              />
+              Marks drawn in
+            </label>
           )}
         </FigureNumber>
         <Caption {...props} />
