@@ -78,6 +78,19 @@ export function formatDateTime(value: DateLike): string {
   return clock ? `${formatDate(value)}${NO_BREAK_SPACE}${clock.time}` : DASH;
 }
 
+/** "11 Dec 2026 09:40 GMT", for what is read far from the laboratory or long after. */
+export function formatDateTimeWithZone(value: DateLike): string {
+  const clock = wallClock(value);
+  if (!clock || !value) return DASH;
+  const zone = new Intl.DateTimeFormat("en-GB", {
+    timeZone: LABORATORY_TIME_ZONE,
+    timeZoneName: "short",
+  })
+    .formatToParts(new Date(value))
+    .find((part) => part.type === "timeZoneName");
+  return `${formatDateTime(value)}${NO_BREAK_SPACE}${zone?.value ?? LABORATORY_TIME_ZONE}`;
+}
+
 /** Calendar days from now until a date on the laboratory's calendar: 0 today, negative when past. */
 export function daysUntil(value: DateLike, now: Date): number | null {
   const then = wallClock(value);

@@ -13,6 +13,19 @@ export const RECORD_KINDS = [
 ] as const;
 export type RecordKind = (typeof RECORD_KINDS)[number];
 
+export const RECORD_KIND_NAMES: Record<RecordKind, string> = {
+  field_return: "Field return",
+  item: "Item",
+  image: "Picture",
+  calibration: "Scale",
+  mark: "Mark",
+  traverse: "Readings",
+  hardness_result: "Hardness",
+  strength_statement: "Strength",
+  mechanism: "Mechanism",
+  second_reading: "Reading",
+};
+
 /** Letters in front of the number of a label that people use: E1, IM-01, T2. */
 export const LABEL_PREFIX: Record<Exclude<RecordKind, "mark" | "item">, string> = {
   field_return: "F",

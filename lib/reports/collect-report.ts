@@ -18,7 +18,7 @@ import { citableValues } from "@/lib/findings/citable-values";
 import { chartTraverseIdsOf } from "@/lib/findings/document";
 import type { IssueRow } from "@/lib/findings/find-issue";
 import { readingContent } from "@/lib/findings/reading-schema";
-import { formatDate, formatDateTime } from "@/lib/format/dates";
+import { formatDate, formatDateTimeWithZone } from "@/lib/format/dates";
 import { openQuestions } from "@/lib/reports/open-questions";
 import { laboratory } from "@/lib/people/laboratory";
 import { ROLE_NAMES } from "@/lib/people/constants";
@@ -36,7 +36,7 @@ async function personOf(reader: Reader, id: string | null, at: Date | null) {
     .from(people)
     .where(eq(people.id, id));
   return person
-    ? { name: person.name, role: ROLE_NAMES[person.role], at: formatDateTime(at) }
+    ? { name: person.name, role: ROLE_NAMES[person.role], at: formatDateTimeWithZone(at) }
     : null;
 }
 

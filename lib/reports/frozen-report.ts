@@ -2,6 +2,7 @@ import "server-only";
 import { z } from "zod";
 import type { Chart } from "@/lib/charts/primitives";
 import { findingsDocument } from "@/lib/findings/document-schema";
+import { RECORD_KINDS } from "@/lib/records/constants";
 
 const person = z.object({ name: z.string(), role: z.string(), at: z.string() });
 const row = z.array(z.string());
@@ -30,7 +31,12 @@ export const frozenReport = z.object({
   gates: z.array(row),
   issues: z.array(row),
   manifest: z.array(
-    z.object({ label: z.string(), kind: z.string(), version: z.number(), sha256: z.string() }),
+    z.object({
+      label: z.string(),
+      kind: z.enum(RECORD_KINDS),
+      version: z.number(),
+      sha256: z.string(),
+    }),
   ),
   charts: z.record(z.string(), z.custom<Chart>(isChart)),
   at: z.string(),

@@ -2,6 +2,7 @@ import "server-only";
 import { citedValuesOf } from "@/lib/findings/document";
 import { formatDate } from "@/lib/format/dates";
 import { AppError } from "@/lib/errors";
+import { RECORD_KIND_NAMES } from "@/lib/records/constants";
 import type { FrozenReport } from "./frozen-report";
 import { STANDARD_CAUTIONS } from "./pdf/cautions";
 import type { DocumentResolver } from "./pdf/document-resolver";
@@ -89,7 +90,11 @@ function annexes(frozen: FrozenReport): ReportSection[] {
         : [
             table(
               ["What", "Version", "SHA-256"],
-              frozen.manifest.map((entry) => [entry.label, String(entry.version), entry.sha256]),
+              frozen.manifest.map((entry) => [
+                `${entry.label} ${RECORD_KIND_NAMES[entry.kind].toLowerCase()}`,
+                String(entry.version),
+                entry.sha256,
+              ]),
               ["left", "right", "left"],
             ),
           ],

@@ -3,6 +3,7 @@ import {
   daysUntil,
   formatDate,
   formatDateTime,
+  formatDateTimeWithZone,
   formatDay,
   formatRecent,
   formatTime,
@@ -20,14 +21,22 @@ describe("dates", () => {
     expect(formatTime("2026-12-11T00:05:00.000Z")).toBe("00:05");
   });
 
+  test("the zone is named where the clock alone could be read in two ways", () => {
+    // The hour of 25 October 2026 that comes twice on the laboratory's clock.
+    const shown = ["2026-10-25T00:30:00Z", "2026-10-25T01:30:00Z"].map(formatDateTimeWithZone);
+    expect(shown.map(plain)).toEqual(["25 Oct 2026 01:30 BST", "25 Oct 2026 01:30 GMT"]);
+  });
+
   test("a calendar day stays that day whatever the time zone", () => {
     expect(plain(formatDate("2026-07-01"))).toBe("1 Jul 2026");
     expect(plain(formatDay("2026-09-30"))).toBe("30 Sep");
   });
 
   test.each([null, undefined, "", "not a date"])("no date (%s) is a dash", (value) => {
-    const shown = [formatDate, formatDay, formatTime, formatDateTime].map((show) => show(value));
-    expect(shown).toEqual(["–", "–", "–", "–"]);
+    const shown = [formatDate, formatDay, formatTime, formatDateTime, formatDateTimeWithZone].map(
+      (show) => show(value),
+    );
+    expect(new Set(shown)).toEqual(new Set(["–"]));
     expect(relativeDays(value, now)).toBe("–");
     expect(formatRecent(value, now)).toBe("–");
   });
