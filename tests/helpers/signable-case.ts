@@ -111,9 +111,8 @@ export async function aSignableCase(): Promise<string> {
   return caseId;
 }
 
-/** The lead engineer with a password, and a sign-in of theirs. */
-export async function leadSignedIn(): Promise<{ lead: Actor; signInId: string }> {
-  const lead = await asLead();
+/** A lead engineer with a password, and a sign-in of theirs. */
+export async function signedIn(lead: Actor): Promise<{ lead: Actor; signInId: string }> {
   await database()
     .update(people)
     .set({ passwordHash: await hashPassword(PASSWORD) })
@@ -122,6 +121,9 @@ export async function leadSignedIn(): Promise<{ lead: Actor; signInId: string }>
   const signInId = await startSignIn({ id: lead.id, signInEpoch: row?.signInEpoch ?? 1 });
   return { lead, signInId };
 }
+
+/** The lead engineer of the cases, signed in. */
+export const leadSignedIn = async () => signedIn(await asLead());
 
 /** What the signing dialogue sends for the text as it stands. */
 export async function signature(caseId: string, password = PASSWORD) {
