@@ -11,9 +11,9 @@ export const metadata: Metadata = { title: "Your account" };
 export default async function MePage() {
   const actor = await pageActor("self.view");
   return (
-    <main id="main" tabIndex={-1} className="max-w-prose px-4 pb-8">
+    <main id="main" tabIndex={-1} className="max-w-prose pb-8">
       <PageHeader title="Your account" />
-      <div className="grid gap-4">
+      <div className="grid gap-4 px-4">
         <Panel>
           <PanelHead title={actor.name} />
           <PanelBody>

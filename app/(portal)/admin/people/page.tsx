@@ -13,12 +13,12 @@ export default async function PeoplePage() {
   const actor = await pageActor("person.view");
   const [people, organisations] = await Promise.all([listPeople(actor), listOrganisations(actor)]);
   return (
-    <main id="main" tabIndex={-1} className="px-4 pb-8">
+    <main id="main" tabIndex={-1} className="pb-8">
       <PageHeader
         title="People"
         note={`${people.length} in ${organisations.length} organisations`}
       />
-      <div className="grid gap-4 xl:grid-cols-[minmax(0,1fr)_20rem]">
+      <div className="grid gap-4 px-4 xl:grid-cols-[minmax(0,1fr)_20rem]">
         <PeopleTable people={people} ownId={actor.id} />
         <div className="grid content-start gap-4">
           <Panel>

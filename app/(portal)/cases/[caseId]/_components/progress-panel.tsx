@@ -37,7 +37,7 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
         actions={lead ? <span className="text-ink-2">Lead {lead}</span> : null}
       />
       <PanelBody>
-        <svg viewBox={`0 0 ${WIDTH} 78`} className="w-full" role="img" aria-label={words}>
+        <svg viewBox={`0 0 ${WIDTH} 78`} className="w-full max-w-prose" role="img" aria-label={words}>
           {periods.map((period) => (
             <rect
               key={period.from}

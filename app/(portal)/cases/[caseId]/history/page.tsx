@@ -59,7 +59,7 @@ export default async function HistoryPage({ params, searchParams }: Props) {
                 </Td>
                 <Td>{entry.what}</Td>
                 <Td>
-                  <HistoryChange before={entry.before} after={entry.after} />
+                  <HistoryChange change={entry.change} before={entry.before} after={entry.after} />
                 </Td>
                 <Td className="font-mono text-12 text-ink-3">{entry.seal}</Td>
               </Tr>

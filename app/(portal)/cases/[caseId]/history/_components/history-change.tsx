@@ -1,52 +1,29 @@
-const SHOWN_CHARACTERS = 160;
+import type { ChangeLine } from "@/lib/audit/describe-change";
 
-/** What an entry changed, field by field; long values are cut, the whole is under "All of it". */
-export function HistoryChange({ before, after }: { before: unknown; after: unknown }) {
+const SHOWN_CHARACTERS = 160;
+const cut = (text: string) =>
+  text.length > SHOWN_CHARACTERS ? `${text.slice(0, SHOWN_CHARACTERS)}…` : text;
+
+type Props = { change: readonly ChangeLine[]; before: unknown; after: unknown };
+
+/** What an entry changed, field by field; the entry as it is kept stands under "As recorded". */
+export function HistoryChange({ change, before, after }: Props) {
   if (before === null && after === null) return null;
-  const words = (value: unknown) =>
-    (typeof value === "string" ? value : JSON.stringify(value)) ?? "";
-  const cut = (text: string) =>
-    text.length > SHOWN_CHARACTERS ? `${text.slice(0, SHOWN_CHARACTERS)}…` : text;
-  const fields = changedFields(before, after);
-  const isCut = fields.some(
-    (field) =>
-      words(field.before).length > SHOWN_CHARACTERS || words(field.after).length > SHOWN_CHARACTERS,
-  );
   return (
     <div className="raw max-w-prose text-12 break-words text-ink-2">
-      {fields.map((field) => (
-        <p key={field.name}>
-          <span className="text-ink-3">{field.name}</span>{" "}
-          {field.before === undefined || field.before === null ? null : (
-            <s>{cut(words(field.before))}</s>
-          )}{" "}
-          {field.after === undefined || field.after === null ? null : cut(words(field.after))}
+      {change.map((line) => (
+        <p key={line.label}>
+          <span className="text-ink-3">{line.label}</span>{" "}
+          {line.before !== null && <s>{cut(line.before)}</s>}{" "}
+          {line.after !== null && cut(line.after)}
         </p>
       ))}
-      {isCut && (
-        <details>
-          <summary>All of it</summary>
-          <pre className="max-h-80 overflow-auto font-mono text-11 whitespace-pre-wrap">
-            {JSON.stringify({ before, after }, null, 1)}
-          </pre>
-        </details>
-      )}
+      <details>
+        <summary className="w-fit py-1 text-ink-3">As recorded</summary>
+        <pre className="max-h-80 overflow-auto font-mono text-11 whitespace-pre-wrap">
+          {JSON.stringify({ before, after }, null, 1)}
+        </pre>
+      </details>
     </div>
   );
-}
-
-function changedFields(
-  before: unknown,
-  after: unknown,
-): { name: string; before: unknown; after: unknown }[] {
-  const left = asFields(before);
-  const right = asFields(after);
-  return [...new Set([...Object.keys(left), ...Object.keys(right)])]
-    .filter((name) => JSON.stringify(left[name] ?? null) !== JSON.stringify(right[name] ?? null))
-    .map((name) => ({ name, before: left[name], after: right[name] }));
-}
-
-function asFields(value: unknown): Record<string, unknown> {
-  if (value === null || value === undefined) return {};
-  return typeof value === "object" && !Array.isArray(value) ? { ...value } : { value };
 }
