@@ -7,7 +7,6 @@ import {
   caseHolds,
   caseMoves,
   caseQuestions,
-  cases,
   people,
   records,
   recordVersions,
@@ -18,10 +17,10 @@ import { type CaseSubject, decide } from "@/lib/auth/policy";
 import type { CitableValues } from "@/lib/records/constants";
 import { describeEvent } from "@/lib/audit/describe-event";
 import { type CaseState, HOLD_NAMES, PRIORITY_NAMES } from "./constants";
+import { type EarlierReturn, earlierReturns } from "./earlier-returns";
 import { type Gate, gateLedger } from "./gates";
 import { getCase } from "./get-case";
 import type { SeenAssignment } from "./schemas";
-import { visibleCases } from "./visible";
 
 export type OverviewMove = { to: CaseState; at: string };
 export type OverviewQuote = {
@@ -64,7 +63,7 @@ export type CaseOverview = {
   moves: OverviewMove[];
   activity: { at: string; who: string; what: string }[];
   issues: { number: number; state: string; releasedAt: string | null }[];
-  earlier: { id: string; number: string | null; title: string }[];
+  earlier: EarlierReturn[];
 };
 
 const STRAND_OF_KIND: Partial<Record<string, string>> = {
@@ -128,24 +127,6 @@ async function quotesOf(caseId: string): Promise<OverviewQuote[]> {
   });
 }
 
-/** Earlier cases on the same drawing that this person may see. */
-async function earlierOf(actor: Actor, row: typeof cases.$inferSelect) {
-  if (row.drawingNumber === "") return [];
-  return database()
-    .select({ id: cases.id, number: cases.number, title: cases.title })
-    .from(cases)
-    .where(
-      and(
-        visibleCases(actor),
-        eq(cases.drawingNumber, row.drawingNumber),
-        ne(cases.id, row.id),
-        ne(cases.state, "draft"),
-      ),
-    )
-    .orderBy(desc(cases.madeAt))
-    .limit(5);
-}
-
 /** Everything the overview page shows; a requester gets status, questions and the released report. */
 export async function caseOverview(actor: Actor, caseId: string): Promise<CaseOverview> {
   const { row, subject } = await getCase(actor, "case.view", caseId);
@@ -187,7 +168,7 @@ export async function caseOverview(actor: Actor, caseId: string): Promise<CaseOv
       .from(reportIssues)
       .where(eq(reportIssues.caseId, caseId))
       .orderBy(asc(reportIssues.number)),
-    earlierOf(actor, row),
+    earlierReturns(actor, row),
   ]);
   const name = (id: string | null) => (id === null ? null : (names.get(id) ?? null));
   return {

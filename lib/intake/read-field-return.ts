@@ -48,7 +48,7 @@ export async function readFieldReturn(actor: Actor, caseId: string): Promise<Fie
       .where(eq(caseQuestions.caseId, caseId))
       .orderBy(asc(caseQuestions.askedAt)),
     listRequestFiles(actor, caseId),
-    earlierReturns(actor, row.drawingNumber, caseId),
+    earlierReturns(actor, row),
   ]);
   const addFiles = decide(actor, "case.addRequestFile", subject);
   return {

@@ -44,7 +44,7 @@ export default async function OverviewPage({ params }: { params: Promise<{ caseI
     <div className="p-4">
       <h1 className="sr-only">Overview</h1>
       <StandingNotices overview={overview} />
-      <div className="mt-3.5 grid gap-4 first:mt-0 xl:grid-cols-[minmax(0,1fr)_24rem] xl:grid-rows-[auto_1fr] 3xl:grid-cols-[minmax(0,1fr)_24rem_22rem] 3xl:grid-rows-1">
+      <div className="grid gap-4 xl:grid-cols-[minmax(0,1fr)_24rem] xl:grid-rows-[auto_1fr] 3xl:grid-cols-[minmax(0,1fr)_24rem_22rem] 3xl:grid-rows-1">
         <div className="grid min-w-0 content-start gap-3.5 xl:row-span-2 3xl:row-span-1">
           <PartPanel overview={overview} mayRead={may("case.viewFieldReturn")} />
           {seesWork && <StrandsPanel overview={overview} />}

@@ -30,10 +30,10 @@ export function PartPanel({ overview, mayRead }: { overview: CaseOverview; mayRe
                   overview.earlier.length === 0
                     ? "None on this drawing"
                     : overview.earlier.map((earlier, i) => (
-                        <span key={earlier.id}>
+                        <span key={earlier.caseId}>
                           {i > 0 && ", "}
                           <Link
-                            href={routes.case(earlier.id)}
+                            href={routes.case(earlier.caseId)}
                             className="font-mono text-12"
                             title={earlier.title}
                           >

@@ -24,6 +24,7 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
   const end = Math.max(now.getTime(), due ?? 0, start + 86_400_000);
   const x = (time: number) => INSET + ((time - start) / (end - start)) * (WIDTH - 2 * INSET);
   const days = Math.round((now.getTime() - start) / 86_400_000);
+  const isLast = x(now.getTime()) > WIDTH - 60;
   const words = [
     ...periods.map((period) => `${period.stage} from ${formatDay(period.from)}`),
     ...(dueOn ? [`due ${formatDate(dueOn)}`] : []),
@@ -37,7 +38,12 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
         actions={lead ? <span className="text-ink-2">Lead {lead}</span> : null}
       />
       <PanelBody>
-        <svg viewBox={`0 0 ${WIDTH} 78`} className="w-full max-w-prose" role="img" aria-label={words}>
+        <svg
+          viewBox={`0 0 ${WIDTH} 78`}
+          className="w-full max-w-prose"
+          role="img"
+          aria-label={words}
+        >
           {periods.map((period) => (
             <rect
               key={period.from}
@@ -75,8 +81,9 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
           </g>
           <path d={`M${x(now.getTime())} 14V56`} stroke="var(--ink)" strokeWidth={1.5} />
           <text
-            x={Math.min(x(now.getTime()) + 6, WIDTH - 44)}
+            x={x(now.getTime()) + (isLast ? -6 : 6)}
             y={24}
+            textAnchor={isLast ? "end" : "start"}
             fontSize={12}
             fontWeight={550}
             fill="var(--ink)"
@@ -86,11 +93,11 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
           {due !== null && (
             <>
               <path d={`M${x(due)} 14V56`} stroke="var(--ink)" strokeWidth={1.5} />
-              {Math.abs(x(due) - x(now.getTime())) > 110 && (
+              {Math.abs(x(due) - x(now.getTime())) > 130 && (
                 <text
-                  x={x(due) - 6}
+                  x={x(due) + (x(due) < 90 ? 6 : -6)}
                   y={24}
-                  textAnchor="end"
+                  textAnchor={x(due) < 90 ? "start" : "end"}
                   fontSize={12}
                   fontWeight={550}
                   fill="var(--ink)"

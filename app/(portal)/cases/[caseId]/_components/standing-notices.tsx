@@ -7,7 +7,7 @@ import { formatDate } from "@/lib/format/dates";
 export function StandingNotices({ overview }: { overview: CaseOverview }) {
   const hasEnded = overview.state === "declined" || overview.state === "cancelled";
   return (
-    <div className="grid gap-2">
+    <div className="mb-3.5 grid gap-2 empty:hidden">
       {hasEnded && (
         <Notice kind="note" title={CASE_STATE_NAMES[overview.state]}>
           {overview.endReason ?? "No reason was written."}

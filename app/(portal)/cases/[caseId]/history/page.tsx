@@ -48,7 +48,7 @@ export default async function HistoryPage({ params, searchParams }: Props) {
           </thead>
           <tbody>
             {history.entries.map((entry) => (
-              <Tr key={entry.position}>
+              <Tr key={entry.position} className="align-top [&>td]:py-1.5">
                 <Td numeric>{entry.position}</Td>
                 <Td className="tn whitespace-nowrap">{formatDateTime(entry.at)}</Td>
                 <Td className="whitespace-nowrap">
