@@ -86,8 +86,8 @@ const config: Config = {
         "spine-narrow": "var(--spine-w-narrow)",
         rail: "var(--rail-w)",
         sheet: rem(720),
+        text: rem(760),
       },
-      maxWidth: { prose: rem(760) },
     },
   },
 };

@@ -11,7 +11,7 @@ export default function ErrorPage({
   reset: () => void;
 }) {
   return (
-    <main className="mx-auto max-w-prose px-6 py-16">
+    <main className="mx-auto max-w-text px-6 py-16">
       <Notice
         kind="bad"
         title="Riverline failed at this page"

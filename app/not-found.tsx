@@ -3,7 +3,7 @@ import { routes } from "@/lib/routes";
 
 export default function NotFound() {
   return (
-    <main className="mx-auto max-w-prose px-6 py-16">
+    <main className="mx-auto max-w-text px-6 py-16">
       <h1 className="text-19 font-head">This is not here, or it is not yours to see</h1>
       <p className="mt-2 text-ink-2">
         The address may be mistyped, or the case belongs to someone else. If you expected it, ask

@@ -11,7 +11,7 @@ export const metadata: Metadata = { title: "Your account" };
 export default async function MePage() {
   const actor = await pageActor("self.view");
   return (
-    <main id="main" tabIndex={-1} className="max-w-prose pb-8">
+    <main id="main" tabIndex={-1} className="max-w-text pb-8">
       <PageHeader title="Your account" />
       <div className="grid gap-4 px-4">
         <Panel>

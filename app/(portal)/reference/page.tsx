@@ -53,7 +53,7 @@ export default async function ReferencePage() {
           </tbody>
         </Table>
       </Panel>
-      <p className="max-w-prose px-4 pt-3 text-13 text-ink-2">
+      <p className="max-w-text px-4 pt-3 text-13 text-ink-2">
         A table that is switched off is neither offered nor used, whoever asks. Figures from memory
         are shipped switched off until someone has compared them with a copy of the standard.
       </p>

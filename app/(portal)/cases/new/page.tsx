@@ -11,7 +11,7 @@ export default async function NewCasePage() {
   const actor = await pageActor("case.create");
   const { clients } = await listChoices(actor);
   return (
-    <main id={MAIN_ID} tabIndex={-1} className="max-w-prose pb-8">
+    <main id={MAIN_ID} tabIndex={-1} className="max-w-text pb-8">
       <PageHeader title="Open a case" note={actor.organisationName} />
       <div className="px-4">
         <StartForm clients={clients} />

@@ -40,7 +40,7 @@ export function ProgressPanel({ moves, dueOn, lead, now }: Props) {
       <PanelBody>
         <svg
           viewBox={`0 0 ${WIDTH} 78`}
-          className="w-full max-w-prose"
+          className="w-full max-w-text"
           role="img"
           aria-label={words}
         >

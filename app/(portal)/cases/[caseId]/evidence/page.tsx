@@ -21,8 +21,8 @@ export default async function EvidencePage({ params, searchParams }: Props) {
     <RegisterDialog caseId={caseId} items={evidence.items} />
   ) : null;
   return (
-    <div className="grid min-h-full lg:grid-cols-[18rem_minmax(0,1fr)]">
-      <section aria-label="Items" className="border-r border-rule-2 bg-surface">
+    <div className="grid min-h-full md:grid-cols-[18rem_minmax(0,1fr)]">
+      <section aria-label="Items" className="md:border-r border-rule-2 bg-surface">
         <div className="flex h-12 items-center justify-between border-b border-rule px-3.5">
           <h1 className="text-14 font-head">
             Evidence <span className="font-normal text-ink-3">{evidence.items.length}</span>
@@ -43,6 +43,7 @@ export default async function EvidencePage({ params, searchParams }: Props) {
           <ItemView
             caseId={caseId}
             item={chosen}
+            parentLabel={evidence.items.find((item) => item.id === chosen.parentId)?.label ?? null}
             holders={evidence.holders}
             mayHandOver={evidence.mayHandOver}
           />

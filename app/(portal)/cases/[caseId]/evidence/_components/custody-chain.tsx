@@ -11,7 +11,7 @@ function Mark({ act }: { act: CustodyRow["act"] }) {
       height="14"
       viewBox="0 0 14 14"
       aria-hidden="true"
-      className="mt-1 shrink-0"
+      className="relative mt-1 shrink-0"
       stroke="var(--action)"
       strokeWidth="1.6"
       fill="var(--surface)"
@@ -34,9 +34,12 @@ function Mark({ act }: { act: CustodyRow["act"] }) {
 export function CustodyChain({ entries }: { entries: CustodyRow[] }) {
   const position = new Map(entries.map((entry) => [entry.id, entry.position]));
   return (
-    <ol reversed className="grid gap-3 text-13">
+    <ol reversed className="text-13">
       {[...entries].reverse().map((entry) => (
-        <li key={entry.id} className="grid grid-cols-[1rem_8.5rem_minmax(0,1fr)_auto] gap-x-3">
+        <li
+          key={entry.id}
+          className="relative grid grid-cols-[1rem_8.5rem_minmax(0,1fr)_auto] gap-x-3 pb-4 before:absolute before:top-4 before:-bottom-1 before:left-1.5 before:w-0.5 before:bg-action last:before:hidden"
+        >
           <Mark act={entry.act} />
           <time dateTime={entry.at} className="tn text-ink-2">
             {formatDateTime(entry.at)}

@@ -4,7 +4,7 @@ import { GateMark } from "@/components/ui/gate-mark";
 import { Notice } from "@/components/ui/notice";
 import { ITEM_KIND_NAMES } from "@/lib/evidence/constants";
 import type { ItemRow } from "@/lib/evidence/list-items";
-import { formatDateTime } from "@/lib/format/dates";
+import { formatDate, formatDateTime } from "@/lib/format/dates";
 import { formatCount, formatQuantity } from "@/lib/format/numbers";
 import { CustodyChain } from "./custody-chain";
 import { HandOverDialog } from "./hand-over-dialog";
@@ -12,12 +12,14 @@ import { HandOverDialog } from "./hand-over-dialog";
 type Props = {
   caseId: string;
   item: ItemRow;
+  /** What it was cut from; null for what came in. */
+  parentLabel: string | null;
   holders: { id: string; name: string }[];
   mayHandOver: boolean;
 };
 
 /** One item: what it is, where it is, and its chain of custody, newest first. */
-export function ItemView({ caseId, item, holders, mayHandOver }: Props) {
+export function ItemView({ caseId, item, parentLabel, holders, mayHandOver }: Props) {
   const last = item.entries.at(-1);
   const { content } = item;
   return (
@@ -26,7 +28,7 @@ export function ItemView({ caseId, item, holders, mayHandOver }: Props) {
         <span className="font-mono text-24 font-medium">{item.label}</span>
         <div>
           <h2 className="text-16 font-head">{content.name}</h2>
-          <p className="text-13 text-ink-3">{ITEM_KIND_NAMES[item.kind]}</p>
+          <p className="text-13 text-ink-3">{kindLine(item, parentLabel)}</p>
         </div>
         {mayHandOver && (
           <div className="ml-auto">
@@ -82,4 +84,15 @@ export function ItemView({ caseId, item, holders, mayHandOver }: Props) {
       </div>
     </article>
   );
+}
+
+/** "Part or half", "Cut from E1 on 19 Nov 2026", "Mount, from E1.1 on 20 Nov 2026" */
+function kindLine(item: ItemRow, parentLabel: string | null): string {
+  const name = ITEM_KIND_NAMES[item.kind];
+  const first = item.entries[0];
+  if (parentLabel === null) return name;
+  const day = first ? ` on ${formatDate(first.at)}` : "";
+  return item.kind === "cut"
+    ? `Cut from ${parentLabel}${day}`
+    : `${name}, from ${parentLabel}${day}`;
 }

@@ -20,7 +20,7 @@ export default async function NewTraversePage({ params }: { params: Promise<{ ca
   return (
     <>
       <PageHeader title="New traverse" note="Set up as the field return asks; all can be changed" />
-      <Panel className="mx-4 max-w-prose">
+      <Panel className="mx-4 max-w-text">
         <PanelBody>
           {station.refusal === null ? (
             <NewTraverseForm

@@ -10,7 +10,7 @@ type Props = { change: readonly ChangeLine[]; before: unknown; after: unknown };
 export function HistoryChange({ change, before, after }: Props) {
   if (before === null && after === null) return null;
   return (
-    <div className="raw max-w-prose text-12 wrap-anywhere text-ink-2">
+    <div className="raw max-w-text text-12 wrap-anywhere text-ink-2">
       {change.map((line) => (
         <p key={line.label}>
           <span className="text-ink-3">{line.label}</span>{" "}

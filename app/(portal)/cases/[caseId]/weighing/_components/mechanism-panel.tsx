@@ -49,7 +49,7 @@ export function MechanismPanel({ caseId, mechanism, isReadOnly }: Props) {
           </span>
         </p>
         {content.reason && (
-          <p className="raw mt-1 max-w-prose text-13 whitespace-pre-line">{content.reason}</p>
+          <p className="raw mt-1 max-w-text text-13 whitespace-pre-line">{content.reason}</p>
         )}
       </PanelBody>
     </Panel>
