@@ -9,19 +9,21 @@ type Props = {
   none: string;
   choices: readonly Choice[];
   isOpen: boolean;
-  onOpenChange: (open: boolean) => void;
+  onClose: () => void;
   onPick: (id: string) => void;
 };
 
 /** Chooses a picture or a traverse of the case. */
-export function PickDialog({ title, none, choices, isOpen, onOpenChange, onPick }: Props) {
+export function PickDialog({ title, none, choices, isOpen, onClose, onPick }: Props) {
   return (
     <Dialog
       open={isOpen}
-      onOpenChange={onOpenChange}
+      onOpenChange={(open) => {
+        if (!open) onClose();
+      }}
       width="form"
       title={title}
-      footer={<Button onClick={() => onOpenChange(false)}>Not now</Button>}
+      footer={<Button onClick={onClose}>Not now</Button>}
     >
       {choices.length === 0 ? (
         <p className="text-13 text-ink-2">{none}</p>

@@ -1,6 +1,7 @@
 "use client";
 
 import { useCallback, useEffect, useRef, useState } from "react";
+import { dropFromDevice, keepOnDevice } from "./device-copy";
 
 /** Two states of a draft of kind `D`, when two people saved. */
 export type DraftConflict<D> = {
@@ -19,10 +20,15 @@ export type SavingState<D> =
   | { kind: "conflict"; conflict: DraftConflict<D> };
 
 type Saved = { revision: number; savedAt: string };
-export type KeptDraft<D> = { revision: number; at: string } & D;
+/** A draft as this device keeps it, and the revision it was written on. */
+export type KeptDraft<D> = { revision: number; at: string; draft: D };
 
 const SAVE_AFTER_MS = 1_500;
 const TRY_AGAIN_MS = 5_000;
+
+/** Stays on screen while one types on and while sending is tried again. */
+const staysShown = ({ kind }: SavingState<object>) =>
+  kind === "offline" || kind === "signed-out" || kind === "conflict";
 
 /** Saves a draft as it is typed, keeps a copy on the device until the server has it, and tells how it stands. */
 export function useDraftSaving<D extends object, S extends Saved>(options: {
@@ -35,129 +41,146 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
   onSaved?: (saved: S) => void;
 }) {
   const { url, storageKey, read, onSaved } = options;
-  const revision = useRef(options.revision);
+  const seen = useRef(options.revision);
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const isSending = useRef(false);
-  const isDirty = useRef(false);
-  const sender = useRef<() => Promise<void>>(() => Promise.resolve());
+  const inFlight = useRef<Promise<void>>(null);
+  // Changes made here, and how many of them the server has.
+  const typed = useRef(0);
+  const stored = useRef(0);
+  // Goes up with every choice between two texts: an answer to what was sent before says nothing.
+  const choice = useRef(0);
+  const isSignedOut = useRef(false);
+  const saver = useRef<() => Promise<boolean>>(() => Promise.resolve(false));
   const [state, setState] = useState<SavingState<D>>({ kind: "saved", at: options.savedAt });
+  const [keepsCopy, setKeepsCopy] = useState(true);
+  const [revision, setRevision] = useState(options.revision);
+
+  const goOnFrom = useCallback((next: number) => {
+    seen.current = next;
+    setRevision(next);
+  }, []);
+
+  const schedule = useCallback((afterMs: number) => {
+    clearTimeout(timer.current);
+    timer.current = setTimeout(() => void saver.current(), afterMs);
+  }, []);
 
   const send = useCallback(async () => {
-    if (isSending.current || !isDirty.current) return;
-    isSending.current = true;
-    isDirty.current = false;
-    const draft = read();
-    setState({ kind: "saving" });
-    const again = () => {
-      isDirty.current = true;
-      timer.current = setTimeout(() => void sender.current(), TRY_AGAIN_MS);
+    const [sent, chosen] = [typed.current, choice.current];
+    setState((now) => (staysShown(now) ? now : { kind: "saving" }));
+    const noAnswer = () => {
+      setState({ kind: "offline" });
+      schedule(TRY_AGAIN_MS);
     };
     try {
       const answer = await fetch(url, {
         method: "PUT",
         headers: { "content-type": "application/json" },
-        body: JSON.stringify({ ...draft, revision: revision.current }),
+        body: JSON.stringify({ ...read(), revision: seen.current }),
       });
+      const body = await answer.json();
+      isSignedOut.current = answer.status === 401;
+      if (chosen !== choice.current) return;
       if (answer.ok) {
-        const saved: S = await answer.json();
-        revision.current = saved.revision;
+        const saved: S = body;
+        goOnFrom(saved.revision);
+        stored.current = sent;
         onSaved?.(saved);
-        if (!isDirty.current) {
-          localStorage.removeItem(storageKey);
+        if (typed.current === sent) {
+          dropFromDevice(storageKey);
           setState({ kind: "saved", at: saved.savedAt });
+        } else {
+          setState({ kind: "waiting" });
+          schedule(SAVE_AFTER_MS);
         }
-      } else {
-        const { error } = await answer.json();
-        if (answer.status === 409 && error.conflict)
-          setState({ kind: "conflict", conflict: error.conflict });
-        else if (answer.status === 401) setState({ kind: "signed-out" });
-        else if (answer.status >= 500) {
-          setState({ kind: "offline" });
-          again();
-        } else setState({ kind: "refused", message: error.message });
-      }
+      } else if (answer.status === 409 && body.error.conflict)
+        setState({ kind: "conflict", conflict: body.error.conflict });
+      else if (answer.status === 401) setState({ kind: "signed-out" });
+      else if (answer.status >= 500) noAnswer();
+      else setState({ kind: "refused", message: body.error.message });
     } catch {
-      // No connection: the copy on the device stays, and sending is tried again.
-      setState({ kind: "offline" });
-      again();
-    } finally {
-      isSending.current = false;
-      if (isDirty.current && timer.current === undefined)
-        timer.current = setTimeout(() => void sender.current(), SAVE_AFTER_MS);
+      // No connection, or an answer that is not the portal's: what is here stays, and is sent again.
+      noAnswer();
     }
-  }, [onSaved, read, storageKey, url]);
+  }, [goOnFrom, onSaved, read, schedule, storageKey, url]);
 
-  useEffect(() => {
-    sender.current = send;
+  /** Sends what the server has not got, at once; answers whether it now has everything. */
+  const saveNow = useCallback(async (): Promise<boolean> => {
+    clearTimeout(timer.current);
+    while (inFlight.current) await inFlight.current;
+    if (typed.current !== stored.current) {
+      inFlight.current = send().finally(() => {
+        inFlight.current = null;
+      });
+      await inFlight.current;
+    }
+    return typed.current === stored.current;
   }, [send]);
 
-  const changed = useCallback(() => {
-    isDirty.current = true;
-    const kept: KeptDraft<D> = {
-      ...read(),
-      revision: revision.current,
-      at: new Date().toISOString(),
-    };
-    localStorage.setItem(storageKey, JSON.stringify(kept));
-    setState((now) =>
-      now.kind === "conflict" || now.kind === "signed-out" ? now : { kind: "waiting" },
-    );
-    clearTimeout(timer.current);
-    timer.current = setTimeout(() => {
-      timer.current = undefined;
-      void sender.current();
-    }, SAVE_AFTER_MS);
-  }, [read, storageKey]);
+  useEffect(() => {
+    saver.current = saveNow;
+  }, [saveNow]);
 
-  const saveNow = useCallback(() => {
-    clearTimeout(timer.current);
-    timer.current = undefined;
-    void sender.current();
-  }, []);
+  const changed = useCallback(() => {
+    typed.current += 1;
+    const kept: KeptDraft<D> = {
+      revision: seen.current,
+      at: new Date().toISOString(),
+      draft: read(),
+    };
+    setKeepsCopy(keepOnDevice(storageKey, kept));
+    setState((now) => (staysShown(now) ? now : { kind: "waiting" }));
+    schedule(SAVE_AFTER_MS);
+  }, [read, schedule, storageKey]);
 
   /** Goes on from the other person's revision, with one's own text. */
-  const overrule = useCallback((theirRevision: number) => {
-    revision.current = theirRevision;
-    isDirty.current = true;
-    void sender.current();
-  }, []);
-
-  /** Takes the other person's text; there is nothing of one's own left to save. */
-  const yieldTo = useCallback(
+  const overrule = useCallback(
     (theirRevision: number) => {
-      revision.current = theirRevision;
-      isDirty.current = false;
-      localStorage.removeItem(storageKey);
+      choice.current += 1;
+      goOnFrom(theirRevision);
+      typed.current += 1;
+      setState({ kind: "saving" });
+      void saver.current();
+    },
+    [goOnFrom],
+  );
+
+  /** Goes on from a text of another revision; there is nothing of one's own left to save. */
+  const yieldTo = useCallback(
+    (otherRevision: number) => {
+      choice.current += 1;
+      clearTimeout(timer.current);
+      goOnFrom(otherRevision);
+      stored.current = typed.current;
+      dropFromDevice(storageKey);
       setState({ kind: "saved", at: null });
     },
-    [storageKey],
+    [goOnFrom, storageKey],
   );
+
+  /** Revision of the text that what stands here goes on from. */
+  const revisionSeen = useCallback(() => seen.current, []);
 
   useEffect(() => {
     const warn = (event: BeforeUnloadEvent) => {
-      if (isDirty.current || isSending.current) event.preventDefault();
+      if (typed.current !== stored.current) event.preventDefault();
     };
-    const online = () => saveNow();
+    const online = () => void saver.current();
+    // Back from signing in in another window.
+    const back = () => {
+      if (isSignedOut.current) void saver.current();
+    };
     window.addEventListener("beforeunload", warn);
     window.addEventListener("online", online);
+    window.addEventListener("focus", back);
     return () => {
       window.removeEventListener("beforeunload", warn);
       window.removeEventListener("online", online);
+      window.removeEventListener("focus", back);
+      // On to another page of the portal: what was typed last goes along.
+      void saver.current();
     };
-  }, [saveNow]);
+  }, []);
 
-  return { state, changed, saveNow, overrule, yieldTo };
-}
-
-/** A copy on this device that the server never got; null when there is none. */
-export function keptDraft<D>(storageKey: string, member: keyof D & string): KeptDraft<D> | null {
-  const text = localStorage.getItem(storageKey);
-  if (text === null) return null;
-  try {
-    const kept: KeptDraft<D> = JSON.parse(text);
-    return typeof kept === "object" && kept !== null && member in kept ? kept : null;
-  } catch {
-    localStorage.removeItem(storageKey);
-    return null;
-  }
+  return { state, keepsCopy, revision, revisionSeen, changed, saveNow, overrule, yieldTo };
 }

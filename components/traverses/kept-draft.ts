@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { dropFromDevice, keepOnDevice, readFromDevice } from "@/components/forms/device-copy";
 import { traverseContent, type TraverseContent } from "@/lib/traverses/schemas";
 
 /** What was typed and not saved yet, kept on this device. */
@@ -11,28 +12,17 @@ const keptDraft = z.object({
 });
 const keyOf = (traverseId: string) => `riverline.traverse.${traverseId}`;
 
-/** False where the device has no room; the page then says so. */
+/** False where the browser keeps no copy; the page then says so. */
 export function keepDraft(traverseId: string, draft: KeptDraft): boolean {
-  try {
-    localStorage.setItem(keyOf(traverseId), JSON.stringify(draft));
-    return true;
-  } catch {
-    return false;
-  }
+  return keepOnDevice(keyOf(traverseId), draft);
 }
 
 /** Null where nothing was kept, or what was kept is of an older form of the page. */
 export function readDraft(traverseId: string): KeptDraft | null {
-  const text = localStorage.getItem(keyOf(traverseId));
-  if (text === null) return null;
-  try {
-    const read = keptDraft.safeParse(JSON.parse(text));
-    return read.success ? read.data : null;
-  } catch {
-    return null;
-  }
+  const read = keptDraft.safeParse(readFromDevice(keyOf(traverseId)));
+  return read.success ? read.data : null;
 }
 
 export function dropDraft(traverseId: string): void {
-  localStorage.removeItem(keyOf(traverseId));
+  dropFromDevice(keyOf(traverseId));
 }

@@ -2,6 +2,7 @@
 
 import { useCallback, useMemo, useState } from "react";
 import { ChartPanel } from "@/components/charts/chart-panel";
+import { NoCopyNotice } from "@/components/forms/no-copy-notice";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";
 import { Shape } from "@/components/ui/shapes";
@@ -174,7 +175,7 @@ export function TraverseStation(props: StationProps) {
         </h1>
         <TraverseTabs tabs={props.tabs} newHref={props.newHref} />
         <div className="ml-auto flex flex-wrap items-center gap-2">
-          {isReadOnly ? null : <SaveMark state={state} />}
+          {isReadOnly ? null : <SaveMark state={state} keepsCopy={autosave.keepsCopy} />}
           <SettingsBar
             content={content}
             enabledTableIds={enabledTableIds}
@@ -220,9 +221,12 @@ export function TraverseStation(props: StationProps) {
           {state.message} {Object.values(state.fields).join(" ")} What you typed is kept here.
         </Notice>
       ) : null}
+      {autosave.keepsCopy ? null : <NoCopyNotice className="mx-4 mb-3" />}
       {state.kind === "offline" ? (
         <Notice kind="offline" title="No connection." className="mx-4 mb-3" live="polite">
-          You can go on; your changes are kept on this device and saved when it is back.
+          You can go on; your changes are kept{" "}
+          {autosave.keepsCopy ? "on this device" : "on this page only, so leave it open,"} and saved
+          when it is back.
         </Notice>
       ) : null}
       {state.kind === "conflict" ? (

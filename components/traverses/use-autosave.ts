@@ -51,6 +51,7 @@ export function useAutosave({
   const [state, setState] = useState<SaveState>({ kind: "saved", at: savedAt });
   const [seenVersion, setSeenVersion] = useState(version);
   const [saved, setSaved] = useState(content);
+  const [keepsCopy, setKeepsCopy] = useState(true);
   const isOnline = useOnline();
   const router = useRouter();
   const latest = useRef(content);
@@ -102,7 +103,9 @@ export function useAutosave({
   useEffect(() => {
     if (isReadOnly || !isChanged || isConflict) return;
     const timer = setTimeout(() => {
-      keepDraft(traverseId, { seenVersion, content, keptAt: new Date().toISOString() });
+      setKeepsCopy(
+        keepDraft(traverseId, { seenVersion, content, keptAt: new Date().toISOString() }),
+      );
       if (isOnline) void send(seenVersion);
       else setState({ kind: "offline" });
     }, afterMs);
@@ -135,6 +138,7 @@ export function useAutosave({
   }, [traverseId]);
 
   return {
+    keepsCopy,
     state: isChanged && state.kind === "saved" ? ({ kind: "unsaved" } as const) : state,
     retry: () => void send(seenVersion),
     /** Saves these rows over the version the other person wrote. */

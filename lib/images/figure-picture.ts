@@ -8,10 +8,9 @@ import { pipeline } from "node:stream/promises";
 import sharp, { type Metadata, type Sharp } from "sharp";
 import { objectStore } from "@/lib/storage/s3";
 import { IMAGE_MAX_PIXELS } from "./constants";
+import { windowOf } from "./grey-window";
 
 const OPTIONS = { limitInputPixels: IMAGE_MAX_PIXELS, failOn: "truncated" } as const;
-/** Share of pixels left dark or bright at either end when 16 bits are brought to 8. */
-const CLIPPED = 0.001;
 
 export type SmallPicture = { raw: Buffer; widthPx: number; heightPx: number; channels: 1 | 3 };
 
@@ -57,7 +56,7 @@ async function fromSixteenBits(picture: Sharp, metadata: Metadata): Promise<Smal
     .raw({ depth: "ushort" })
     .toBuffer({ resolveWithObject: true });
   const values = new Uint16Array(data.buffer, data.byteOffset, data.byteLength / 2);
-  const [black, white] = windowOf(values);
+  const { black, white } = windowOf(values);
   const raw = Buffer.alloc(values.length);
   for (const [i, value] of values.entries()) {
     raw[i] = Math.round(
@@ -65,21 +64,4 @@ async function fromSixteenBits(picture: Sharp, metadata: Metadata): Promise<Smal
     );
   }
   return { raw, widthPx: info.width, heightPx: info.height, channels: isGrey ? 1 : 3 };
-}
-
-function windowOf(values: Uint16Array): [black: number, white: number] {
-  const counts = new Uint32Array(65_536);
-  for (const value of values) counts[value] = (counts[value] ?? 0) + 1;
-  const reach = (from: number, step: number) => {
-    let left = CLIPPED * values.length;
-    let level = from;
-    while (level + step >= 0 && level + step < counts.length) {
-      left -= counts[level] ?? 0;
-      if (left < 0) break;
-      level += step;
-    }
-    return level;
-  };
-  const black = reach(0, 1);
-  return [black, Math.max(reach(counts.length - 1, -1), black + 1)];
 }

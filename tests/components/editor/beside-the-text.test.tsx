@@ -3,10 +3,10 @@ import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
 import { cleanup, fireEvent, render, screen, within } from "@testing-library/react";
 import { CitePanel, type CitableValue } from "@/components/editor/cite-panel";
 import { ConflictView } from "@/components/editor/conflict-view";
-import { EditorNotices } from "@/components/editor/editor-notices";
 import { StalePanel } from "@/components/editor/stale-panel";
 import type { StaleValue } from "@/components/editor/unsettled-values";
 import { WithdrawnPanel } from "@/components/editor/withdrawn-panel";
+import { DraftNotices } from "@/components/forms/draft-notices";
 import { findingsWith, words } from "../../helpers/findings-text";
 
 beforeEach(() => {
@@ -227,11 +227,15 @@ describe("two who saved", () => {
 });
 
 describe("notices", () => {
-  const show = (state: React.ComponentProps<typeof EditorNotices>["state"], changes = 0) =>
+  const show = (
+    state: React.ComponentProps<typeof DraftNotices>["state"],
+    { changes = 0, keepsCopy = true } = {},
+  ) =>
     render(
-      <EditorNotices
-        refusal={null}
+      <DraftNotices
+        notSaved="Findings were not saved."
         state={state}
+        keepsCopy={keepsCopy}
         changes={changes}
         signInHref="/sign-in"
         onTryAgain={vi.fn()}
@@ -239,7 +243,7 @@ describe("notices", () => {
     );
 
   test("without a connection count what is kept", () => {
-    const { container } = show({ kind: "offline" }, 3);
+    const { container } = show({ kind: "offline" }, { changes: 3 });
     expect(container.textContent?.replace(/\u00a0/g, " ")).toContain(
       "You can go on; 3 changes are kept on this device",
     );
@@ -248,6 +252,14 @@ describe("notices", () => {
   test("after the sign-in ended lead back in", () => {
     show({ kind: "signed-out" });
     expect(screen.getByRole("link", { name: /Sign in/ }).getAttribute("href")).toBe("/sign-in");
+  });
+
+  test("say when the browser keeps no copy, and promise none", () => {
+    const { container } = show({ kind: "offline" }, { keepsCopy: false });
+    expect(container.textContent).toContain("This browser keeps no copy.");
+    expect(container.textContent).toContain("still saved to the laboratory");
+    expect(container.textContent).toContain("kept on this page only");
+    expect(container.textContent).not.toContain("on this device");
   });
 
   test("of a saved text are none", () => {

@@ -1,6 +1,7 @@
 import { act, cleanup, renderHook } from "@testing-library/react";
 import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
-import { keptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
+import { readFromDevice } from "@/components/forms/device-copy";
+import { useDraftSaving } from "@/components/forms/use-draft-saving";
 
 type Draft = { document: string; rootCause: string };
 type Answer = { status: number; body: unknown } | "no connection";
@@ -26,6 +27,7 @@ afterEach(() => {
   cleanup();
   vi.useRealTimers();
   vi.unstubAllGlobals();
+  vi.restoreAllMocks();
 });
 
 const saved = (revision: number): Answer => ({
@@ -78,13 +80,13 @@ describe("saving as one types", () => {
     page.type("It");
     await pass(1_000);
     page.type("It broke");
-    expect(keptDraft<Draft>(KEY, "document")).toMatchObject({ document: "It broke", revision: 1 });
+    expect(readFromDevice(KEY)).toMatchObject({ revision: 1, draft: { document: "It broke" } });
     await pass(1_400);
     expect(sent).toEqual([]);
     await pass(200);
     expect(sent).toMatchObject([{ revision: 1, document: "It broke" }]);
     expect(page.state()).toBe("saved");
-    expect(keptDraft<Draft>(KEY, "document")).toBeNull();
+    expect(readFromDevice(KEY)).toBeNull();
   });
 
   test("goes on without a connection, and sends the newest text when it is back", async () => {
@@ -96,7 +98,7 @@ describe("saving as one types", () => {
     page.type("one two");
     await pass(1_600);
     expect(page.state()).toBe("offline");
-    expect(keptDraft<Draft>(KEY, "document")?.document).toBe("one two");
+    expect(readFromDevice(KEY)).toMatchObject({ draft: { document: "one two" } });
     await pass(5_100);
     expect(page.state()).toBe("saved");
     expect(sent.at(-1)).toMatchObject({ revision: 1, document: "one two" });
@@ -120,7 +122,49 @@ describe("saving as one types", () => {
     page.type("one");
     await pass(1_600);
     expect(page.state()).toBe("signed-out");
-    expect(keptDraft<Draft>(KEY, "document")?.document).toBe("one");
+    expect(readFromDevice(KEY)).toMatchObject({ draft: { document: "one" } });
+  });
+
+  test("saves by itself when one comes back from signing in", async () => {
+    answers = [{ status: 401, body: { error: { code: "NOT_SIGNED_IN", message: "" } } }, saved(2)];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    act(() => void window.dispatchEvent(new Event("focus")));
+    await pass(1);
+    expect(page.state()).toBe("saved");
+    expect(sent).toMatchObject([{ document: "one" }, { document: "one" }]);
+  });
+
+  test("sends what was refused again when asked, without another key", async () => {
+    answers = [
+      { status: 400, body: { error: { code: "INVALID", message: "A figure is not from here." } } },
+      saved(2),
+    ];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    expect(page.state()).toBe("refused");
+    await expect(act(() => page.hook().saveNow())).resolves.toBe(true);
+    expect(sent.at(-1)).toMatchObject({ revision: 1, document: "one" });
+  });
+
+  test("does not take an answer that is not the portal's for a saved text", async () => {
+    vi.stubGlobal("fetch", () => Promise.resolve(new Response("<h1>Bad gateway</h1>")));
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    expect(page.state()).toBe("offline");
+    expect(readFromDevice(KEY)).toMatchObject({ draft: { document: "one" } });
+  });
+
+  test("sends what was typed last when one goes on to another page", async () => {
+    answers = [saved(2)];
+    const page = open();
+    page.type("one");
+    cleanup();
+    await pass(1);
+    expect(sent).toMatchObject([{ revision: 1, document: "one" }]);
   });
 
   test("after a conflict keeps mine over theirs only when asked to", async () => {
@@ -152,5 +196,36 @@ describe("saving as one types", () => {
     await pass(1);
     expect(sent.map(({ revision }) => revision)).toEqual([1, 5, 6, 6]);
     expect(page.state()).toBe("saved");
+  });
+
+  test("goes on saving where the browser keeps no copy, and says so", async () => {
+    const full = vi.spyOn(Storage.prototype, "setItem").mockImplementation(() => {
+      throw new DOMException("exceeded the quota", "QuotaExceededError");
+    });
+    answers = ["no connection", saved(2), saved(3)];
+    const page = open();
+    expect(page.hook().keepsCopy).toBe(true);
+    page.type("one");
+    expect(page.hook().keepsCopy).toBe(false);
+    await pass(1_600);
+    expect(page.state()).toBe("offline");
+    await pass(5_100);
+    expect(page.state()).toBe("saved");
+    full.mockRestore();
+    page.type("one two");
+    expect(page.hook().keepsCopy).toBe(true);
+  });
+
+  test("goes on saving where storage is forbidden altogether", async () => {
+    for (const name of ["setItem", "getItem", "removeItem"] as const)
+      vi.spyOn(Storage.prototype, name).mockImplementation(() => {
+        throw new DOMException("The operation is insecure.", "SecurityError");
+      });
+    answers = [saved(2)];
+    const page = open();
+    page.type("one");
+    await pass(1_600);
+    expect(page.state()).toBe("saved");
+    expect(page.hook().keepsCopy).toBe(false);
   });
 });
