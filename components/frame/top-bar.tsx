@@ -35,7 +35,7 @@ export function TopBar({ homeHref, items, person, links, search, children, signO
       </div>
       <div className="ml-auto flex items-center gap-3">
         <OfflineMark />
-        {search ? <div className="max-lg:hidden">{search}</div> : null}
+        {search ? <div className="max-md:hidden">{search}</div> : null}
         {children}
         <div className="border-l border-rule pl-2">
           <PersonMenu {...person} links={links} signOut={signOut} />

@@ -19,12 +19,13 @@ export function openBrowser(): Promise<Browser> {
 
 type Look = { width?: number; height?: number; theme?: "light" | "dark" };
 
-/** A window of its own, signed in; `faults` gathers what the page complains of. */
-export async function signedIn(
+type Window = { page: Page; faults: string[] };
+
+/** A window of its own; `faults` gathers what the page complains of. */
+export async function signedOut(
   browser: Browser,
-  email: string,
   { width = 1440, height = 900, theme = "light" }: Look = {},
-): Promise<{ page: Page; faults: string[] }> {
+): Promise<Window> {
   const context = await browser.newContext({
     baseURL: baseUrl(),
     viewport: { width, height },
@@ -36,6 +37,12 @@ export async function signedIn(
   page.on("console", (message) => {
     if (message.type() === "error") faults.push(`${page.url()}: ${message.text()}`);
   });
+  return { page, faults };
+}
+
+/** A window of its own, signed in. */
+export async function signedIn(browser: Browser, email: string, look?: Look): Promise<Window> {
+  const { page, faults } = await signedOut(browser, look);
   await page.goto("/sign-in");
   await page.getByLabel("E-mail").fill(email);
   await page.getByLabel("Password", { exact: true }).fill(DEMO_PASSWORD);
