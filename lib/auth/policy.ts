@@ -13,6 +13,8 @@ export type Relation = "own" | "organisation" | "assigned" | "any";
 /** What the policy needs to know of a case. Null fields are not assigned yet. */
 export type CaseSubject = {
   state: CaseState;
+  /** The laboratory got it. What was cancelled before stays with the one who started it. */
+  wasSent: boolean;
   organisationId: string;
   requesterId: string;
   investigatorId: string | null;
@@ -274,16 +276,13 @@ function relates(actor: Actor, subject: CaseSubject, relation: Relation): boolea
     case "organisation":
       return (
         subject.requesterId === actor.id ||
-        (subject.organisationId === actor.organisationId && subject.state !== "draft")
+        (subject.organisationId === actor.organisationId && subject.wasSent)
       );
     case "assigned":
-      return (
-        subject.requesterId === actor.id ||
-        (isAssigned(actor, subject) && subject.state !== "draft")
-      );
+      return subject.requesterId === actor.id || (isAssigned(actor, subject) && subject.wasSent);
     case "any":
       return (
-        (subject.state !== "draft" || subject.requesterId === actor.id) &&
+        (subject.wasSent || subject.requesterId === actor.id) &&
         (!subject.isRestricted || isAssigned(actor, subject) || seesRestricted(actor))
       );
   }

@@ -42,6 +42,7 @@ export async function findCase(
     row,
     subject: {
       state: row.state,
+      wasSent: row.number !== null,
       organisationId: row.organisationId,
       requesterId: row.requesterId,
       investigatorId: row.investigatorId,

@@ -1,5 +1,5 @@
 import "server-only";
-import { and, eq, ne, or, type SQL, sql } from "drizzle-orm";
+import { and, eq, or, type SQL, sql } from "drizzle-orm";
 import { cases } from "@/db/schema";
 import type { Actor } from "@/lib/auth/actor";
 import { POLICY, type Relation, seesRestricted } from "@/lib/auth/policy";
@@ -14,7 +14,8 @@ export function visibleCases(actor: Actor): SQL {
   const roles: Partial<Record<string, Relation>> = POLICY["case.view"].roles;
   const relation = roles[actor.role];
   const own = eq(cases.requesterId, actor.id);
-  const sent = ne(cases.state, "draft");
+  // Put so that the index on the number does not draw the planner away from the list's own order.
+  const sent = sql`(${cases.number} is null) = 0`;
   switch (relation) {
     case undefined:
       return sql`false`;

@@ -23,6 +23,7 @@ export async function openTiles(actor: Actor, imageId: string): Promise<TileSour
       scaleFactors: images.scaleFactors,
       isShareable: images.isShareable,
       state: cases.state,
+      number: cases.number,
       organisationId: cases.organisationId,
       requesterId: cases.requesterId,
       investigatorId: cases.investigatorId,
@@ -44,6 +45,7 @@ export async function openTiles(actor: Actor, imageId: string): Promise<TileSour
     ...row,
     technicianIds: row.technicianId === null ? [] : [row.technicianId],
     authorIds: [],
+    wasSent: row.number !== null,
     hasReleasedIssue: false,
   };
   const maySee =

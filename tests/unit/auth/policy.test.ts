@@ -25,6 +25,7 @@ function actor(
 
 const base: CaseSubject = {
   state: "examining",
+  wasSent: true,
   organisationId: CLIENT,
   requesterId: "per_requester",
   investigatorId: "per_investigator",
@@ -38,6 +39,7 @@ const base: CaseSubject = {
 const in_ = (state: CaseState, change: Partial<CaseSubject> = {}): CaseSubject => ({
   ...base,
   state,
+  wasSent: state !== "draft",
   ...change,
 });
 
@@ -177,6 +179,14 @@ describe("the policy table", () => {
       expect(decide(actor(role), "case.view", in_("draft")).allowed).toBe(false);
     }
     expect(decide(actor("requester"), "case.view", in_("draft")).allowed).toBe(true);
+  });
+  it("a draft that was cancelled before it was sent stays with the one who started it", () => {
+    const neverSent = in_("cancelled", { wasSent: false });
+    for (const role of ["technician", "investigator", "lead", "administrator"] as const) {
+      expect(decide(actor(role), "case.view", neverSent).allowed).toBe(false);
+    }
+    expect(decide(actor("requester", "per_colleague"), "case.view", neverSent).allowed).toBe(false);
+    expect(decide(actor("requester"), "case.view", neverSent).allowed).toBe(true);
   });
 
   it("a technician or investigator who is not assigned does no work on a case", () => {
