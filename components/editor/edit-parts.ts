@@ -72,7 +72,19 @@ export function takeOut(editor: Editor, position: number): void {
     .run();
 }
 
-/** Selects a part and brings it into view. */
+/** Brings a place into view: a part is selected, words get the cursor before them. */
 export function showPart(editor: Editor, position: number): void {
-  editor.chain().setNodeSelection(position).focus().scrollIntoView().run();
+  const node = editor.state.doc.nodeAt(position);
+  const chain = editor.chain();
+  (node && node.isAtom && !node.isText && node.type.spec.selectable !== false
+    ? chain.setNodeSelection(position)
+    : chain.setTextSelection(position)
+  )
+    .focus()
+    .scrollIntoView()
+    .run();
+  // Where nothing can be written the library scrolls nowhere.
+  const shown = editor.view.nodeDOM(position) ?? editor.view.domAtPos(position).node;
+  const element = shown instanceof HTMLElement ? shown : shown.parentElement;
+  element?.scrollIntoView({ block: "center" });
 }

@@ -7,6 +7,7 @@ import { AsideNotices } from "@/components/forms/aside-notices";
 import { DraftNotices } from "@/components/forms/draft-notices";
 import { Notice } from "@/components/ui/notice";
 import type { DocumentNode } from "@/lib/findings/document";
+import type { ReviewNote } from "@/lib/findings/note-constants";
 import { routes } from "@/lib/routes";
 import { BesideText } from "./beside-text";
 import { CitePanel, type CitableValue } from "./cite-panel";
@@ -26,6 +27,9 @@ import { FindingsSheet } from "./findings-sheet";
 import { FlaggedPanel } from "./flagged-panel";
 import { flaggedPhrases } from "./flagged-phrases";
 import { InsertDialogs, type Picking } from "./insert-dialogs";
+import type { NoteActs } from "./notes/note-acts";
+import { showNotes } from "./notes/note-marks";
+import { type NotesHandle, NotesPanel } from "./notes/notes-panel";
 import { StalePanel } from "./stale-panel";
 import { Toolbar } from "./toolbar";
 import { unsettledValues } from "./unsettled-values";
@@ -51,6 +55,8 @@ export type FindingsEditorProps = {
   cited: CitedState[];
   pictures: PictureSource[];
   traverses: TraverseSource[];
+  notes: ReviewNote[];
+  noteActs: NoteActs;
   isSigned: boolean;
   refusal: string | null;
 };
@@ -61,6 +67,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
   const isReadOnly = refusal !== null;
   const search = useRef<HTMLInputElement>(null);
   const editorRef = useRef<Editor>(null);
+  const notesPanel = useRef<NotesHandle>(null);
   const [cited, setCited] = useState(props.cited);
   const [picking, setPicking] = useState<Picking>(null);
   const [isRailOpen, setRailOpen] = useState(false);
@@ -91,10 +98,20 @@ export function FindingsEditor(props: FindingsEditorProps) {
   useEffect(() => {
     editorRef.current = editor;
   }, [editor]);
+  const { notes, noteActs } = props;
+  useEffect(() => {
+    // What is settled is in the list beside the text; in the text it would only be in the way.
+    if (editor)
+      showNotes(
+        editor,
+        notes.filter(({ state }) => state === "open"),
+      );
+  }, [editor, notes]);
 
   const { stale, withdrawn } = editor
     ? unsettledValues(editor, sources.citedLook, citable)
     : { stale: [], withdrawn: [] };
+  const openNotes = notes.filter(({ state }) => state === "open").length;
   const show = (position: number) => editor && showPart(editor, position);
   const saveAgain = () => void saving.saveNow();
 
@@ -102,6 +119,11 @@ export function FindingsEditor(props: FindingsEditorProps) {
     if ((event.ctrlKey || event.metaKey) && event.key === "s") {
       event.preventDefault();
       saveAgain();
+    }
+    if (event.ctrlKey && event.altKey && event.key.toLowerCase() === "m" && noteActs.mayLeave) {
+      event.preventDefault();
+      flushSync(() => setRailOpen(true));
+      notesPanel.current?.leave();
     }
     if (event.altKey && event.key === "ArrowDown" && stale[0]) {
       event.preventDefault();
@@ -129,7 +151,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
               isSigned={props.isSigned}
               state={state}
               keepsCopy={saving.keepsCopy}
-              toSettle={stale.length + withdrawn.length}
+              toSettle={stale.length + withdrawn.length + openNotes}
               isRailOpen={isRailOpen}
               onRail={() => setRailOpen(!isRailOpen)}
             />
@@ -185,6 +207,16 @@ export function FindingsEditor(props: FindingsEditorProps) {
             onShow={show}
             onTakeOut={(position) => editor && takeOut(editor, position)}
           />
+          {editor && (
+            <NotesPanel
+              ref={notesPanel}
+              caseId={caseId}
+              notes={notes}
+              acts={noteActs}
+              editor={editor}
+              onShow={show}
+            />
+          )}
           <CitePanel
             values={citable}
             search={search}

@@ -4,6 +4,7 @@ import { useEffect } from "react";
 import { type Content, useEditor } from "@tiptap/react";
 import { TEXT_EXTENSIONS } from "@/lib/findings/extensions";
 import { KeepSections } from "./keep-sections";
+import { NoteMarks } from "./notes/note-marks";
 import { SHOWN_PARTS } from "./part-views";
 
 type Options = {
@@ -19,7 +20,7 @@ export function useFindingsText({ document, isReadOnly, onWrite, onCite }: Optio
   const editor = useEditor({
     immediatelyRender: false,
     editable: !isReadOnly,
-    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS, KeepSections],
+    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS, KeepSections, NoteMarks],
     content: document as Content,
     editorProps: {
       attributes: {

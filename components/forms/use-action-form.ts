@@ -4,7 +4,7 @@ import { useState, useTransition } from "react";
 import type { FieldErrors } from "@/lib/errors";
 
 /** Answer of a server action as forms see it. */
-type Answer<T> =
+export type Answer<T> =
   { ok: true; value: T } | { ok: false; error: { message: string; fields?: FieldErrors } };
 
 export type ActionForm<T> = {

@@ -6,5 +6,6 @@ export * from "./files";
 export * from "./images";
 export * from "./traverses";
 export * from "./reports";
+export * from "./notes";
 export * from "./audit";
 export * from "./jobs";

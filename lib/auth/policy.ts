@@ -64,10 +64,15 @@ const notAuthor = (actor: Actor, subject: CaseSubject) =>
 
 const isSecondReader = (actor: Actor, subject: CaseSubject) =>
   subject.secondReaderId !== actor.id
-    ? "Only the second reader named for this case records the reading."
+    ? "Only the second reader named for this case records the reading and leaves notes."
     : subject.authorIds.includes(actor.id)
       ? "You wrote part of this report. Someone else has to read it."
       : null;
+
+const notWhileReading = (actor: Actor, subject: CaseSubject) =>
+  subject.state === "in_review" && subject.secondReaderId === actor.id
+    ? "You read this text as second reader, so you do not write in it. Leave notes beside it."
+    : null;
 
 /** Who may do what. Nothing else in the product decides this. */
 export const POLICY = {
@@ -182,7 +187,12 @@ export const POLICY = {
   "mechanism.weigh": { roles: WRITERS, states: WORK_STATES, says: "weigh mechanisms" },
 
   // Findings and report
-  "findings.write": { roles: WRITERS, states: WORK_STATES, says: "write the findings" },
+  "findings.write": {
+    roles: WRITERS,
+    states: WORK_STATES,
+    unless: notWhileReading,
+    says: "write the findings",
+  },
   "findings.sendToSecondReader": {
     roles: WRITERS,
     states: MOVES.sendToSecondReader.from,
@@ -193,6 +203,24 @@ export const POLICY = {
     states: ["in_review"],
     unless: isSecondReader,
     says: "record the second reading",
+  },
+  "findings.leaveNote": {
+    roles: { investigator: "any", lead: "any" },
+    states: ["in_review"],
+    unless: isSecondReader,
+    says: "leave a note as second reader",
+  },
+  "findings.answerNote": {
+    roles: WRITERS,
+    states: WORK_STATES,
+    unless: notWhileReading,
+    says: "answer the second reader's notes",
+  },
+  "findings.returnNote": {
+    roles: { investigator: "any", lead: "any" },
+    states: ["in_review"],
+    unless: isSecondReader,
+    says: "open or withdraw a note they left as second reader",
   },
   "findings.sendForSignOff": {
     roles: WRITERS,

@@ -13,6 +13,7 @@ import {
 } from "@/lib/findings/document";
 import { hardnessResultFacts } from "@/lib/traverses/result-facts";
 import { mechanismContent } from "@/lib/mechanisms/schemas";
+import { countOpenNotes } from "@/lib/findings/list-notes";
 import { readingContent } from "@/lib/findings/reading-schema";
 import { staleVersionIds } from "@/lib/records/stale";
 import { routes } from "@/lib/routes";
@@ -268,6 +269,14 @@ async function secondReading(
     return open("Sent back with a note", routes.findings(caseId), "See it");
   if (reading.documentSha256 !== documentDigest(issue.document)) {
     return open("The findings changed after the reading", routes.signOff(caseId), "Ask again");
+  }
+  const openNotes = await countOpenNotes(reader, issue.id);
+  if (openNotes > 0) {
+    return open(
+      `Read, ${count(openNotes, "note")} of the reader not settled`,
+      routes.findings(caseId),
+      openNotes === 1 ? "Settle it" : "Settle them",
+    );
   }
   const [reader2] = await reader
     .select({ name: people.name })

@@ -1,10 +1,16 @@
 import { getSchema } from "@tiptap/core";
+import type { Node as PartNode } from "@tiptap/pm/model";
 import { type DocumentNode, SECTION_HEADING } from "./document";
 import { FINDINGS_EXTENSIONS } from "./extensions";
 import { SECTIONS } from "./sections";
 
 const schema = getSchema(FINDINGS_EXTENSIONS);
 const PLACE = new Map<string, number>(SECTIONS.map(({ key }, i) => [key, i]));
+
+/** A checked document as the editor holds it. */
+export function documentTree(document: DocumentNode): PartNode {
+  return schema.nodeFromJSON(document);
+}
 
 /**
  * What is wrong with how the parts of a document stand in one another, by the editor's own rules;

@@ -14,6 +14,8 @@ import { type Citable, citableValues } from "./citable-values";
 import { type CitedState, citedStates } from "./cited-states";
 import type { DocumentNode } from "./document";
 import { findIssue } from "./find-issue";
+import { listNotes } from "./list-notes";
+import type { ReviewNote } from "./note-constants";
 
 export type FindingsPage = {
   caseId: string;
@@ -29,6 +31,9 @@ export type FindingsPage = {
   pictures: { id: string; label: string; caption: string }[];
   traverses: { id: string; label: string; name: string; chart: Chart }[];
   isSigned: boolean;
+  notes: ReviewNote[];
+  /** What this person may do with the notes of the second reader now. */
+  noteActs: { leave: boolean; answer: boolean };
   /** Why nothing can be written now; null when it can. */
   refusal: string | null;
 };
@@ -38,7 +43,7 @@ export async function readFindings(actor: Actor, caseId: string): Promise<Findin
   const { row, subject } = await getCase(actor, "case.viewWork", caseId);
   const issue = await findIssue(database(), caseId);
   if (!issue) throw notFound();
-  const [citable, cited, pictures, traverses, [writer]] = await Promise.all([
+  const [citable, cited, pictures, traverses, notes, [writer]] = await Promise.all([
     citableValues(database(), caseId),
     citedStates(database(), issue.document),
     database()
@@ -55,6 +60,7 @@ export async function readFindings(actor: Actor, caseId: string): Promise<Findin
       .where(and(eq(images.caseId, caseId), eq(images.state, "ready"), ne(records.state, "void")))
       .orderBy(asc(records.madeAt), asc(records.id)),
     loadTraverses(database(), caseId),
+    listNotes(database(), issue.id),
     issue.savedById
       ? database().select({ name: people.name }).from(people).where(eq(people.id, issue.savedById))
       : Promise.resolve([]),
@@ -85,6 +91,11 @@ export async function readFindings(actor: Actor, caseId: string): Promise<Findin
         chart: chartOfTraverse(traverse, { theme: "paper" }),
       })),
     isSigned: issue.signedAt !== null,
+    notes,
+    noteActs: {
+      leave: decide(actor, "findings.leaveNote", subject).allowed,
+      answer: decide(actor, "findings.answerNote", subject).allowed,
+    },
     refusal: decision.allowed ? null : decision.says,
   };
 }

@@ -13,6 +13,7 @@ import { setVoid } from "@/lib/records/void-record";
 import { createRecord, nextLabel } from "@/lib/records/write-version";
 import { mailInvestigator } from "./mail-investigator";
 import { findIssue } from "./find-issue";
+import { countOpenNotes } from "./list-notes";
 import { RecordReadingInput } from "./move-schemas";
 import type { ReadingContent } from "./reading-schema";
 
@@ -71,14 +72,15 @@ export async function recordReading(actor: Actor, raw: unknown): Promise<{ label
       await tx.update(reportIssues).set({ state: "drafting" }).where(eq(reportIssues.id, issue.id));
       await moveCase(tx, actor, row, "sendBack", {}, input.note);
     }
-    await mailInvestigator(
-      tx,
-      row,
-      input.verdict === "read"
-        ? `${actor.name} has read the findings.`
-        : `${actor.name} sent the findings back.`,
-      input.note,
-    );
+    const did = input.verdict === "read" ? "has read the findings" : "sent the findings back";
+    const openNotes = await countOpenNotes(tx, issue.id);
+    const beside =
+      openNotes === 0
+        ? ""
+        : openNotes === 1
+          ? " 1 note beside the text waits for your answer."
+          : ` ${openNotes} notes beside the text wait for your answer.`;
+    await mailInvestigator(tx, row, `${actor.name} ${did}.${beside}`, input.note);
     return { label };
   });
 }

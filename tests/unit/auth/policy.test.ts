@@ -101,6 +101,17 @@ const TABLE: Partial<
     states: ["in_review"],
     subject: { secondReaderId: "per_lead" },
   },
+  "findings.leaveNote": {
+    roles: ["lead"],
+    states: ["in_review"],
+    subject: { secondReaderId: "per_lead" },
+  },
+  "findings.answerNote": { roles: ["investigator", "lead"], states: WORK },
+  "findings.returnNote": {
+    roles: ["lead"],
+    states: ["in_review"],
+    subject: { secondReaderId: "per_lead" },
+  },
   "findings.sendForSignOff": { roles: ["investigator", "lead"], states: ["in_review"] },
   "findings.sendBack": { roles: ["investigator", "lead"], states: ["in_review", "in_approval"] },
   "report.sign": { roles: ["lead"], states: ["in_approval"] },
@@ -232,6 +243,20 @@ describe("the policy table", () => {
       decide(reader, "findings.recordReading", { ...review, authorIds: ["per_reader"] }).allowed,
     ).toBe(false);
     expect(decide(actor("investigator"), "findings.recordReading", review).allowed).toBe(false);
+  });
+
+  it("a second reader leaves notes and neither writes in the text they read nor answers them", () => {
+    const reader = actor("investigator", "per_reader");
+    const review = in_("in_review", { secondReaderId: "per_reader" });
+    expect(decide(reader, "findings.leaveNote", review).allowed).toBe(true);
+    for (const action of ["findings.write", "findings.answerNote"] as const) {
+      expect(decide(reader, action, review)).toMatchObject({ because: "condition" });
+      expect(decide(reader, action, { ...review, state: "analysing" }).allowed).toBe(true);
+    }
+    const author = actor("investigator");
+    expect(decide(author, "findings.leaveNote", review).allowed).toBe(false);
+    expect(decide(author, "findings.returnNote", review).allowed).toBe(false);
+    expect(decide(author, "findings.answerNote", review).allowed).toBe(true);
   });
 
   it("nobody without a released issue reads a report", () => {
