@@ -7,7 +7,7 @@ import { AsideNotices } from "@/components/forms/aside-notices";
 import { DraftNotices } from "@/components/forms/draft-notices";
 import { Notice } from "@/components/ui/notice";
 import type { DocumentNode } from "@/lib/findings/document";
-import type { ReviewNote } from "@/lib/findings/note-constants";
+import type { ReviewNote } from "@/lib/findings/constants";
 import { routes } from "@/lib/routes";
 import { BesideText } from "./beside-text";
 import { CitePanel, type CitableValue } from "./cite-panel";

@@ -1,10 +1,5 @@
 import { int, json, mysqlTable, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import {
-  NOTE_KINDS,
-  NOTE_SEVERITIES,
-  NOTE_STATES,
-  type NoteReply,
-} from "@/lib/findings/note-constants";
+import { NOTE_KINDS, NOTE_SEVERITIES, NOTE_STATES, type NoteReply } from "@/lib/findings/constants";
 import { id } from "./columns/id";
 import { madeAt } from "./columns/dates";
 import { people } from "./people";

@@ -9,7 +9,7 @@ import { parseInput } from "@/lib/http/parse-input";
 import { newId } from "@/lib/new-id";
 import { documentTree } from "./document-structure";
 import { findIssue } from "./find-issue";
-import { noteLabel } from "./note-constants";
+import { noteLabel } from "./constants";
 import { LeaveNoteInput } from "./note-schemas";
 import { findFigure, findPassage, sectionTexts } from "./passages";
 

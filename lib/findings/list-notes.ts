@@ -2,7 +2,7 @@ import "server-only";
 import { and, asc, count, eq } from "drizzle-orm";
 import type { Reader } from "@/db/client";
 import { people, reviewNotes } from "@/db/schema";
-import type { ReviewNote } from "./note-constants";
+import type { ReviewNote } from "./constants";
 
 /** Notes of the second reader on an issue, in the order they were left. The caller asked the policy. */
 export async function listNotes(reader: Reader, issueId: string): Promise<ReviewNote[]> {

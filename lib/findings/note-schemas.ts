@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { NOTE_KINDS, NOTE_SEVERITIES, NOTE_WORDS_MAX, PASSAGE_MAX } from "./note-constants";
+import { NOTE_KINDS, NOTE_SEVERITIES, NOTE_WORDS_MAX, PASSAGE_MAX } from "./constants";
 import { SECTIONS, type SectionKey } from "./sections";
 
 const id = z.string().min(1).max(40);

@@ -15,7 +15,7 @@ import { type CitedState, citedStates } from "./cited-states";
 import type { DocumentNode } from "./document";
 import { findIssue } from "./find-issue";
 import { listNotes } from "./list-notes";
-import type { ReviewNote } from "./note-constants";
+import type { ReviewNote } from "./constants";
 
 export type FindingsPage = {
   caseId: string;

@@ -6,7 +6,7 @@ import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
 import { AppError, notFound } from "@/lib/errors";
 import { findIssue } from "./find-issue";
-import { noteLabel, type NoteReply, type NoteState } from "./note-constants";
+import { noteLabel, type NoteReply, type NoteState } from "./constants";
 
 const STATE_AFTER: Record<NoteReply["act"], NoteState> = {
   answered: "answered",

@@ -12,7 +12,7 @@ import {
   NOTE_SEVERITY_NAMES,
   NOTE_WORDS_MAX,
   PASSAGE_MAX,
-} from "@/lib/findings/note-constants";
+} from "@/lib/findings/constants";
 import { SECTIONS } from "@/lib/findings/sections";
 import type { NotePlace } from "./note-places";
 

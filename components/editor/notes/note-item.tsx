@@ -10,7 +10,7 @@ import {
   NOTE_STATE_NAMES,
   type NoteReply,
   type ReviewNote,
-} from "@/lib/findings/note-constants";
+} from "@/lib/findings/constants";
 import { formatDateTime, formatDay } from "@/lib/format/dates";
 import type { NoteActs } from "./note-acts";
 import { ReplyForm } from "./reply-form";

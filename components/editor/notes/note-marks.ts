@@ -2,7 +2,7 @@ import { type Editor, Extension } from "@tiptap/core";
 import type { Node as PartNode } from "@tiptap/pm/model";
 import { Plugin, PluginKey } from "@tiptap/pm/state";
 import { Decoration, DecorationSet } from "@tiptap/pm/view";
-import type { ReviewNote } from "@/lib/findings/note-constants";
+import type { ReviewNote } from "@/lib/findings/constants";
 import { sectionTexts } from "@/lib/findings/passages";
 import { placeOfNote } from "./note-places";
 

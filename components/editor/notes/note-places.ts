@@ -2,7 +2,7 @@ import type { Editor } from "@tiptap/react";
 import type { Node as PartNode } from "@tiptap/pm/model";
 import { NodeSelection } from "@tiptap/pm/state";
 import { CHART_FIGURE, FIGURE } from "@/lib/findings/document";
-import { PASSAGE_MAX, type ReviewNote } from "@/lib/findings/note-constants";
+import { PASSAGE_MAX, type ReviewNote } from "@/lib/findings/constants";
 import { findFigure, findPassage, passageAt, sectionTexts } from "@/lib/findings/passages";
 import { SECTIONS, type SectionKey } from "@/lib/findings/sections";
 

@@ -5,7 +5,7 @@ import type { Editor } from "@tiptap/react";
 import { Button } from "@/components/ui/button";
 import { Kbd } from "@/components/ui/kbd";
 import { LinkButton } from "@/components/ui/link-button";
-import type { ReviewNote } from "@/lib/findings/note-constants";
+import type { ReviewNote } from "@/lib/findings/constants";
 import { sectionTexts } from "@/lib/findings/passages";
 import { SECTIONS } from "@/lib/findings/sections";
 import { routes } from "@/lib/routes";

@@ -4,7 +4,7 @@ import { type Answer, useActionForm } from "@/components/forms/use-action-form";
 import { Button } from "@/components/ui/button";
 import { TextAreaField } from "@/components/ui/labelled-fields";
 import { Notice } from "@/components/ui/notice";
-import { NOTE_WORDS_MAX } from "@/lib/findings/note-constants";
+import { NOTE_WORDS_MAX } from "@/lib/findings/constants";
 
 type Props = {
   id: string;
