@@ -1,4 +1,5 @@
 import { bigint, index, int, json, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { SUBJECT_LABEL_MAX } from "@/lib/audit/constants";
 import { asciiText, id, sha256 } from "./columns/id";
 import { instant } from "./columns/dates";
 
@@ -17,7 +18,7 @@ export const auditEvents = mysqlTable(
     action: asciiText("action", { length: 60 }).notNull(),
     subjectKind: asciiText("subject_kind", { length: 40 }).notNull(),
     subjectId: asciiText("subject_id", { length: 40 }).notNull(),
-    subjectLabel: varchar("subject_label", { length: 120 }).notNull(),
+    subjectLabel: varchar("subject_label", { length: SUBJECT_LABEL_MAX }).notNull(),
     before: json("before").$type<unknown>(),
     after: json("after").$type<unknown>(),
     previousSha256: sha256("previous_sha256").notNull(),

@@ -5,6 +5,7 @@ import { auditEvents, auditHeads } from "@/db/schema";
 import type { Actor } from "@/lib/auth/actor";
 import type { Action } from "@/lib/auth/policy";
 import { canonicalJson, sha256Hex } from "@/lib/canonical-json";
+import { SUBJECT_LABEL_MAX } from "./constants";
 import { INSTALLATION_CHAIN, START_OF_CHAIN, type ChainedEvent } from "./chain";
 
 /** Events that no person's action stands behind. */
@@ -26,6 +27,14 @@ export type NewEvent = {
   before: unknown;
   after: unknown;
 };
+
+/** A long title or name, cut between letters; the whole stands in what the event holds. */
+function shortened(label: string): string {
+  const letters = [...label];
+  return letters.length <= SUBJECT_LABEL_MAX
+    ? label
+    : `${letters.slice(0, SUBJECT_LABEL_MAX - 1).join("")}…`;
+}
 
 /** Appends one event to the chain of its case, in the transaction of the deed. */
 export async function recordEvent(tx: Transaction, event: NewEvent): Promise<void> {
@@ -51,7 +60,7 @@ export async function recordEvent(tx: Transaction, event: NewEvent): Promise<voi
     action: event.action,
     subjectKind: event.subject.kind,
     subjectId: event.subject.id,
-    subjectLabel: event.subject.label,
+    subjectLabel: shortened(event.subject.label),
     before: event.before ?? null,
     after: event.after ?? null,
     previousSha256: head.sha256,
