@@ -1,11 +1,15 @@
 import { z } from "zod";
 
-const cursor = z.tuple([z.union([z.string(), z.number()]), z.string()]);
+const cursor = z.tuple([z.union([z.string(), z.number(), z.null()]), z.string()]);
 export type Cursor = z.infer<typeof cursor>;
 
-/** Place in a list: the sort value and id of the last row seen. */
+/** Longest place in an address: a title of 200 control characters, as JSON in Base64. */
+export const CURSOR_MAX = 2000;
+
+/** Place in a list: the sort value and id of the last row seen; null where the row has no value. */
 export function encodeCursor(value: Cursor): string {
-  return btoa(encodeURIComponent(JSON.stringify(value)))
+  const bytes = new TextEncoder().encode(JSON.stringify(value));
+  return btoa(String.fromCharCode(...bytes))
     .replace(/\+/g, "-")
     .replace(/\//g, "_")
     .replace(/=+$/, "");
@@ -15,9 +19,10 @@ export function encodeCursor(value: Cursor): string {
 export function decodeCursor(text: string): Cursor | null {
   if (text === "") return null;
   try {
-    return cursor.parse(
-      JSON.parse(decodeURIComponent(atob(text.replace(/-/g, "+").replace(/_/g, "/")))),
+    const bytes = Uint8Array.from(atob(text.replace(/-/g, "+").replace(/_/g, "/")), (letter) =>
+      letter.charCodeAt(0),
     );
+    return cursor.parse(JSON.parse(new TextDecoder("utf-8", { fatal: true }).decode(bytes)));
   } catch {
     return null;
   }

@@ -1,11 +1,26 @@
 import "server-only";
-import { and, asc, between, desc, eq, gt, inArray, like, lt, or, type SQL, sql } from "drizzle-orm";
+import {
+  and,
+  asc,
+  between,
+  desc,
+  eq,
+  gt,
+  inArray,
+  isNotNull,
+  isNull,
+  like,
+  lt,
+  or,
+  type SQL,
+  sql,
+} from "drizzle-orm";
 import { alias } from "drizzle-orm/mysql-core";
 import { database } from "@/db/client";
 import { cases, organisations, people } from "@/db/schema";
 import type { Actor } from "@/lib/auth/actor";
 import { requireAllowed } from "@/lib/auth/require";
-import { decodeCursor, encodeCursor } from "./cursor";
+import { type Cursor, decodeCursor, encodeCursor } from "./cursor";
 import type { CaseListRow } from "./list-row";
 import { type ListParams, PAGE_SIZE, type Sort } from "./list-params";
 import { caseNumberPrefix, fullTextQuery } from "./search-terms";
@@ -61,13 +76,37 @@ function filters(actor: Actor, params: ListParams): SQL | undefined {
   );
 }
 
-function afterCursor(params: ListParams): SQL | undefined {
-  const cursor = decodeCursor(params.after);
-  if (!cursor) return undefined;
-  const column = COLUMN[params.sort];
-  const value = params.sort === "changed" ? new Date(String(cursor[0])) : cursor[0];
-  const past = params.dir === "asc" ? gt : lt;
-  return or(past(column, value), and(eq(column, value), past(cases.id, cursor[1])));
+/** Sort value of a place, as the column holds it; undefined where an address holds something else. */
+function placeValue(sort: Sort, value: Cursor[0]): string | number | Date | null | undefined {
+  switch (sort) {
+    case "due":
+    case "stage":
+      return typeof value === "number" ? value : undefined;
+    case "title":
+      return typeof value === "string" ? value : undefined;
+    case "number":
+      return typeof value === "number" ? undefined : value;
+    case "changed": {
+      const at = new Date(typeof value === "string" ? value : Number.NaN);
+      return Number.isNaN(at.getTime()) ? undefined : at;
+    }
+  }
+}
+
+/** Rows after a place. MariaDB puts rows without a value first when rising, last when falling. */
+function afterCursor({ after, sort, dir }: ListParams): SQL | undefined {
+  const cursor = decodeCursor(after);
+  const value = cursor ? placeValue(sort, cursor[0]) : undefined;
+  if (!cursor || value === undefined) return undefined;
+  const column = COLUMN[sort];
+  const past = dir === "asc" ? gt : lt;
+  const laterId = past(cases.id, cursor[1]);
+  if (value === null) {
+    const sameValue = and(isNull(column), laterId);
+    return dir === "asc" ? or(isNotNull(column), sameValue) : sameValue;
+  }
+  const withoutValue = sort === "number" && dir === "desc" ? isNull(column) : undefined;
+  return or(past(column, value), and(eq(column, value), laterId), withoutValue);
 }
 
 /** One page of the cases this person may see, found by keyset: as quick at the end as at the start. */
@@ -110,14 +149,14 @@ export async function listCases(actor: Actor, params: ListParams): Promise<CaseL
   };
 }
 
-function sortValue(row: typeof cases.$inferSelect, sort: Sort): string | number {
+function sortValue(row: typeof cases.$inferSelect, sort: Sort): Cursor[0] {
   switch (sort) {
     case "due":
       return row.dueKey ?? 0;
     case "changed":
       return row.changedAt.toISOString();
     case "number":
-      return row.number ?? "";
+      return row.number;
     case "title":
       return row.title;
     case "stage":

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { STAGES } from "./constants";
+import { CURSOR_MAX } from "./cursor";
 
 export const SORTS = ["due", "changed", "number", "title", "stage"] as const;
 export type Sort = (typeof SORTS)[number];
@@ -24,7 +25,7 @@ const params = z.object({
   approval: z.enum(["yes", ""]).catch(""),
   sort: z.enum(SORTS).catch("due"),
   dir: z.enum(DIRECTIONS).catch("asc"),
-  after: z.string().max(400).catch(""),
+  after: z.string().max(CURSOR_MAX).catch(""),
   view: z.string().max(40).catch(""),
 });
 export type ListParams = z.infer<typeof params>;
