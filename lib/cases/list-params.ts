@@ -5,6 +5,7 @@ import { CURSOR_MAX } from "./cursor";
 export const SORTS = ["due", "changed", "number", "title", "stage"] as const;
 export type Sort = (typeof SORTS)[number];
 export const DIRECTIONS = ["asc", "desc"] as const;
+const VIEW_KEYS = ["", "mine", "signature", "client", "all"] as const;
 export const PAGE_SIZE = 50;
 export const SEARCH_MAX = 200;
 
@@ -21,12 +22,12 @@ const params = z.object({
   investigator: z.string().max(40).catch(""),
   hold: z.enum(["yes", ""]).catch(""),
   ended: z.enum(["yes", ""]).catch(""),
-  asked: z.enum(["yes", ""]).catch(""),
-  approval: z.enum(["yes", ""]).catch(""),
   sort: z.enum(SORTS).catch("due"),
   dir: z.enum(DIRECTIONS).catch("asc"),
   after: z.string().max(CURSOR_MAX).catch(""),
-  view: z.string().max(40).catch(""),
+  view: z.enum(VIEW_KEYS).catch(""),
+  /** The kept view that this began as; it filters nothing by itself. */
+  saved: z.string().max(40).catch(""),
 });
 export type ListParams = z.infer<typeof params>;
 
@@ -44,12 +45,11 @@ export function parseListParams(search: Search): ListParams {
     investigator: one("investigator"),
     hold: one("hold"),
     ended: one("ended"),
-    asked: one("asked"),
-    approval: one("approval"),
     sort: one("sort") || "due",
     dir: one("dir") || "asc",
     after: one("after"),
     view: one("view"),
+    saved: one("saved"),
   });
 }
 
@@ -67,19 +67,27 @@ export function listQuery(current: ListParams, change: Partial<ListParams> = {})
   set("investigator", next.investigator);
   set("hold", next.hold);
   set("ended", next.ended);
-  set("asked", next.asked);
-  set("approval", next.approval);
   set("sort", next.sort, "due");
   set("dir", next.dir, "asc");
   set("after", next.after);
+  set("saved", next.saved);
   return query.toString();
 }
 
-/** Views everyone has. `mine` and `approval` are filled in for the person. */
+/** What a list shows and how, without the place in it: what is kept of it under a name. */
+export const queryToKeep = (params: ListParams) => listQuery(params, { saved: "" });
+
+/** Address of a kept view: what was kept, and which one it is. */
+export const keptViewQuery = (view: { id: string; query: string }) =>
+  listQuery(parseListParams(Object.fromEntries(new URLSearchParams(view.query))), {
+    saved: view.id,
+  });
+
+/** Views everyone has; "mine" is filled in for the person. */
 export const BUILT_IN_VIEWS = [
   { key: "", name: "Open and recent" },
   { key: "mine", name: "Mine" },
   { key: "signature", name: "Waiting for signature" },
   { key: "client", name: "Waiting for client" },
   { key: "all", name: "All" },
-] as const;
+] as const satisfies readonly { key: (typeof VIEW_KEYS)[number]; name: string }[];

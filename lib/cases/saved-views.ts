@@ -1,7 +1,7 @@
 import "server-only";
 import { and, asc, count, eq } from "drizzle-orm";
 import { database } from "@/db/client";
-import { savedViews } from "@/db/schema";
+import { people, savedViews } from "@/db/schema";
 import { databaseErrorNumber, DUPLICATE_KEY, transaction } from "@/db/transaction";
 import { recordEvent } from "@/lib/audit/record";
 import type { Actor } from "@/lib/auth/actor";
@@ -42,6 +42,12 @@ export async function saveView(actor: Actor, raw: unknown): Promise<SavedView> {
           .set({ name: input.name, query: input.query })
           .where(eq(savedViews.id, id));
       } else {
+        // Two at once wait for one another here, so that neither counts without the other.
+        await tx
+          .select({ id: people.id })
+          .from(people)
+          .where(eq(people.id, actor.id))
+          .for("update");
         const [kept] = await tx
           .select({ n: count() })
           .from(savedViews)

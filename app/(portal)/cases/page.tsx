@@ -31,7 +31,7 @@ export default async function CasesPage({ searchParams }: { searchParams: Promis
     listViews(actor),
   ]);
   const mayOpen = roleMay(actor, "case.create");
-  const isFiltered = listQuery({ ...params, view: "", sort: "due", dir: "asc" }) !== "";
+  const isFiltered = listQuery({ ...params, view: "", saved: "", sort: "due", dir: "asc" }) !== "";
   const openOne = (
     <LinkButton href={routes.newCase()} look="primary">
       <Plus size={16} aria-hidden="true" /> Open a case

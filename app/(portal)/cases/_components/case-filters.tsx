@@ -20,7 +20,7 @@ export function CaseFilters({ params, choices }: Props) {
   const [isBusy, start] = useTransition();
   const go = (change: Partial<ListParams>) =>
     start(() => router.push(routes.cases(listQuery(params, change))));
-  const isSet = listQuery({ ...params, view: "", sort: "due", dir: "asc" }) !== "";
+  const isSet = listQuery({ ...params, view: "", saved: "", sort: "due", dir: "asc" }) !== "";
   return (
     <form
       role="search"

@@ -8,7 +8,7 @@ import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
 import { TextField } from "@/components/ui/labelled-fields";
 import { TabLinks } from "@/components/ui/tab-links";
-import { type ListParams, listQuery } from "@/lib/cases/list-params";
+import { keptViewQuery, type ListParams, queryToKeep } from "@/lib/cases/list-params";
 import { routes } from "@/lib/routes";
 import { dropSavedView, keepView } from "../actions";
 
@@ -25,11 +25,10 @@ export function ViewTabs({ builtIn, views, params }: Props) {
   const [isNaming, setNaming] = useState(false);
   const form = useActionForm<View>();
   const drop = useActionForm<void>();
-  const own = views.find((view) => view.id === params.view);
-  const asSaved = (query: string, id: string) => `${query}${query ? "&" : ""}view=${id}`;
-  const plainQuery = listQuery({ ...params, view: own ? "" : params.view });
+  const own = views.find((view) => view.id === params.saved);
+  const plainQuery = queryToKeep(params);
   const isChanged = own !== undefined && own.query !== plainQuery;
-  const show = (view: View) => router.push(routes.cases(asSaved(view.query, view.id)));
+  const show = (view: View) => router.push(routes.cases(keptViewQuery(view)));
   return (
     <div>
       <TabLinks
@@ -38,12 +37,12 @@ export function ViewTabs({ builtIn, views, params }: Props) {
           ...builtIn.map(({ key, name }) => ({
             href: routes.cases(key ? `view=${key}` : ""),
             label: name,
-            current: params.view === key,
+            current: !own && params.view === key,
           })),
           ...views.map((view) => ({
-            href: routes.cases(asSaved(view.query, view.id)),
+            href: routes.cases(keptViewQuery(view)),
             label: view.name,
-            current: params.view === view.id,
+            current: own?.id === view.id,
           })),
         ]}
       >
