@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useRef, useState } from "react";
+import { useEffect, useEffectEvent, useRef, useState } from "react";
 import { flushSync } from "react-dom";
 import type { Content, Editor } from "@tiptap/react";
 import { AsideNotices } from "@/components/forms/aside-notices";
@@ -115,7 +115,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
   const show = (position: number) => editor && showPart(editor, position);
   const saveAgain = () => void saving.saveNow();
 
-  function onKeyDown(event: React.KeyboardEvent) {
+  const onKeyDown = useEffectEvent((event: KeyboardEvent) => {
     if ((event.ctrlKey || event.metaKey) && event.key === "s") {
       event.preventDefault();
       saveAgain();
@@ -130,11 +130,16 @@ export function FindingsEditor(props: FindingsEditorProps) {
       const from = editor?.state.selection.from ?? 0;
       show((stale.find((value) => value.position > from) ?? stale[0]).position);
     }
-  }
+  });
+  useEffect(() => {
+    // Anywhere on the page: who reads chooses words without the focus going to the text.
+    window.addEventListener("keydown", onKeyDown);
+    return () => window.removeEventListener("keydown", onKeyDown);
+  }, []);
 
   return (
     <FindingsProvider value={sources}>
-      <div className="grid min-h-full xl:grid-cols-[minmax(0,1fr)_20rem]" onKeyDown={onKeyDown}>
+      <div className="grid min-h-full xl:grid-cols-[minmax(0,1fr)_20rem]">
         <div className="min-w-0 bg-desk">
           {editor && !isReadOnly && (
             <Toolbar

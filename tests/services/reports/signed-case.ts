@@ -5,7 +5,10 @@ import { records } from "@/db/schema";
 import { assignPeople } from "@/lib/cases/assign-people";
 import { describeItem } from "@/lib/evidence/describe-item";
 import { registerItem } from "@/lib/evidence/register-item";
+import { answerNote } from "@/lib/findings/answer-note";
+import { leaveNote } from "@/lib/findings/leave-note";
 import { recordReading } from "@/lib/findings/record-reading";
+import { returnNote } from "@/lib/findings/return-note";
 import { sendBack } from "@/lib/findings/send-back";
 import { sendForSignOff } from "@/lib/findings/send-for-sign-off";
 import { sendToSecondReader } from "@/lib/findings/send-to-second-reader";
@@ -106,6 +109,20 @@ export async function aSignedCase() {
       sendToSecondReader(investigator, { caseId, readerId: reader.id }),
     "record a reading": () =>
       recordReading(reader, { caseId, verdict: "read", note: "", revision }),
+    "leave a note": () =>
+      leaveNote(reader, {
+        caseId,
+        section: "answer",
+        passage: "",
+        figureId: null,
+        kind: "error",
+        severity: "major",
+        words: "Say more.",
+      }),
+    "answer a note": () =>
+      answerNote(investigator, { caseId, noteId: "note_none", act: "done", words: "" }),
+    "withdraw a note": () =>
+      returnNote(reader, { caseId, noteId: "note_none", act: "withdrawn", words: "" }),
     "send for sign-off": () => sendForSignOff(investigator, { caseId }),
     "send back": () => sendBack(lead, { caseId, note: "Change it." }),
     "sign again": async () => signReport(signer.lead, signer.signInId, await signature(caseId)),
