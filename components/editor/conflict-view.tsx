@@ -38,7 +38,7 @@ export function ConflictView({ conflict, onKeepMine, onTakeTheirs }: Props) {
     <div className="p-4">
       <Notice
         kind="conflict"
-        title="Findings were not saved"
+        title="Findings were not saved."
         live="assertive"
         actions={
           <>

@@ -59,6 +59,8 @@ export type FindingsEditorProps = {
   noteActs: NoteActs;
   isSigned: boolean;
   refusal: string | null;
+  /** Parts of the report that the portal makes from the records, on paper of their own. */
+  annexes: React.ReactNode;
 };
 
 /** The findings as a sheet of paper, with what can be cited beside it. */
@@ -197,6 +199,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
             onRootCause={(rootCause) => draft.write({ rootCause })}
             editor={editor}
           />
+          {props.annexes}
         </div>
         <BesideText isOpen={isRailOpen} onClose={() => setRailOpen(false)}>
           <StalePanel

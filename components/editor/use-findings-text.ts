@@ -5,6 +5,7 @@ import { type Content, useEditor } from "@tiptap/react";
 import { TEXT_EXTENSIONS } from "@/lib/findings/extensions";
 import { KeepSections } from "./keep-sections";
 import { NoteMarks } from "./notes/note-marks";
+import { NumberSections } from "./number-sections";
 import { SHOWN_PARTS } from "./part-views";
 
 type Options = {
@@ -20,7 +21,7 @@ export function useFindingsText({ document, isReadOnly, onWrite, onCite }: Optio
   const editor = useEditor({
     immediatelyRender: false,
     editable: !isReadOnly,
-    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS, KeepSections, NoteMarks],
+    extensions: [...TEXT_EXTENSIONS, ...SHOWN_PARTS, KeepSections, NumberSections, NoteMarks],
     content: document as Content,
     editorProps: {
       attributes: {

@@ -232,7 +232,7 @@ export async function writeHoistShaft(
   const rows = readings(AT_FILLET);
   if (rows[0]) rows[0].leftOutReason = "Too near the edge: 0.10 mm, 2.5 × d is 0.139 mm.";
   const firstRows = rows.map((row) =>
-    row.id === "r10" ? { ...row, d1: "63.0", d2: "63.7" } : row,
+    row.id === "r10" ? { ...row, d1: "63.4", d2: "64.0" } : row,
   );
   const atFillet = {
     ...asked,
@@ -351,6 +351,16 @@ export async function writeHoistShaft(
       sent: [
         [
           "Two shaft halves, a bearing ring and an oil sample. The faces had not been fitted together; light rust on the gear side.",
+        ],
+      ],
+      custody: [
+        [
+          "Unbroken from receipt. The owner allowed the cut through the gear-side half; the other half was not cut.",
+        ],
+      ],
+      methods: [
+        [
+          "Visual examination, stereo and electron microscope, sections ground and etched, hardness by Vickers HV1 (ISO 6507-1), case depth by ISO 18203. Nothing departed from these.",
         ],
       ],
       fractography: [

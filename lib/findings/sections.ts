@@ -4,6 +4,8 @@ export const SECTIONS = [
   { key: "scope", title: "What was asked" },
   { key: "background", title: "Background as supplied" },
   { key: "sent", title: "What was sent" },
+  { key: "custody", title: "Custody and permissions" },
+  { key: "methods", title: "Methods and equipment" },
   { key: "fractography", title: "Fractography" },
   { key: "hardness", title: "Hardness" },
   { key: "microstructure", title: "Microstructure" },
@@ -16,11 +18,15 @@ export const SECTIONS = [
 ] as const;
 export type SectionKey = (typeof SECTIONS)[number]["key"];
 
+/** What each section is for, shown where nothing is written yet. */
 export const SECTION_HINTS: Record<SectionKey, string> = {
   answer: "What failed, how and why, how sure that is, and what is not known. One page.",
   scope: "The questions, what was left out, and who limited it.",
   background: "Service, loads and history as the owner stated them, not verified.",
   sent: "Pieces received, their condition, and what is missing.",
+  custody: "Gaps in the chain, seals found broken, and who allowed what was cut. Else: unbroken.",
+  methods:
+    "How it was examined, with which equipment, by which edition, and what departed from it.",
   fractography: "What was seen on the fracture, facts only.",
   hardness: "Readings, depths and whether they meet the drawing, with the rule used.",
   microstructure: "What the sections show.",

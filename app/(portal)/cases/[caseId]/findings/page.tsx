@@ -1,7 +1,9 @@
 import type { Metadata } from "next";
+import { Suspense } from "react";
 import { FindingsEditor } from "@/components/editor/findings-editor";
 import { readFindings } from "@/lib/findings/read-findings";
 import { orNotFound, pageActor } from "@/lib/http/page";
+import { Annexes } from "./_components/annexes";
 import { answerReaderNote, leaveReaderNote, returnReaderNote } from "./actions";
 
 export const metadata: Metadata = { title: "Findings" };
@@ -14,6 +16,13 @@ export default async function FindingsPage({ params }: { params: Promise<{ caseI
     <FindingsEditor
       key={`${page.issueNumber}`}
       {...page}
+      annexes={
+        page.isSigned ? null : (
+          <Suspense fallback={null}>
+            <Annexes actor={actor} caseId={caseId} />
+          </Suspense>
+        )
+      }
       noteActs={{
         mayLeave: noteActs.leave,
         mayAnswer: noteActs.answer,

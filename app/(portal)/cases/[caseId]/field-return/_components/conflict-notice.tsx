@@ -33,7 +33,7 @@ export function ConflictNotice({ conflict, onKeepMine, onTakeTheirs }: Props) {
     <div className="grid gap-2">
       <Notice
         kind="conflict"
-        title="The field return was not saved"
+        title="The field return was not saved."
         live="assertive"
         actions={
           <>
