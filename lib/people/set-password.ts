@@ -27,6 +27,11 @@ async function store(
     .update(people)
     .set({ passwordHash, signInEpoch: sql`${people.signInEpoch} + 1` })
     .where(eq(people.id, person.id));
+  // Links mailed before would let an old message change the password that was chosen since.
+  await tx
+    .update(personTokens)
+    .set({ usedAt: new Date() })
+    .where(and(eq(personTokens.personId, person.id), isNull(personTokens.usedAt)));
   await recordEvent(tx, {
     caseId: null,
     actor: person,
