@@ -6,7 +6,7 @@ import { transaction } from "@/db/transaction";
 import { recordEvent } from "@/lib/audit/record";
 import { PASSWORD_MAX_LENGTH } from "@/lib/people/constants";
 import { verifyPassword } from "./password";
-import { countFailure, forgetFailures, isThrottled } from "./throttle";
+import { forgetTry, takeTry } from "./throttle";
 
 export const THROTTLED = "THROTTLED";
 
@@ -19,16 +19,15 @@ export async function checkPassword(
   password: string,
   address: string,
 ): Promise<{ id: string; signInEpoch: number } | null> {
-  if (await isThrottled(email, address)) throw new Error(THROTTLED);
   const [person] = await database().select().from(people).where(eq(people.email, email.trim()));
+  // The database takes accents and capitals for the same letter, so the account is named as kept.
+  const account = person?.email ?? email;
+  if (!(await takeTry(account, address))) throw new Error(THROTTLED);
   const fits =
     password.length <= PASSWORD_MAX_LENGTH &&
     (await verifyPassword(person?.isActive ? person.passwordHash : null, password));
-  if (!fits || !person) {
-    await countFailure(email, address);
-    return null;
-  }
-  await forgetFailures(email);
+  if (!fits || !person) return null;
+  await forgetTry(account, address);
   await transaction((tx) =>
     recordEvent(tx, {
       caseId: null,

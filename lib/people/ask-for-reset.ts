@@ -3,7 +3,7 @@ import { and, eq } from "drizzle-orm";
 import { people } from "@/db/schema";
 import { transaction } from "@/db/transaction";
 import { recordEvent } from "@/lib/audit/record";
-import { countFailure, isThrottled } from "@/lib/auth/throttle";
+import { takeTry } from "@/lib/auth/throttle";
 import { AppError } from "@/lib/errors";
 import { parseInput } from "@/lib/http/parse-input";
 import { queueMail } from "@/lib/outbox/mail";
@@ -15,9 +15,7 @@ import { ForgottenInput } from "./schemas";
 /** Mails a link for a new password. The answer is the same whether the account exists or not. */
 export async function askForReset(raw: unknown, address: string): Promise<void> {
   const { email } = parseInput(ForgottenInput, raw);
-  const key = `reset:${email}`;
-  if (await isThrottled(key, address)) throw new AppError("TOO_MANY");
-  await countFailure(key, address);
+  if (!(await takeTry(`reset:${email}`, address))) throw new AppError("TOO_MANY");
   await transaction(async (tx) => {
     const [person] = await tx
       .select()
