@@ -85,8 +85,7 @@ function FigureView(props: ReactNodeViewProps) {
       className="my-4 border-b border-paper-rule pb-2"
     >
       {shown ? (
-        // The picture is drawn by the server with its marks, behind the session's cookie.
-        // eslint-disable-next-line @next/next/no-img-element
+        // eslint-disable-next-line @next/next/no-img-element -- its address asks for the sign-in, which the framework's image service does not have
         <img
           src={routes.api.figure(imageId, withMarks)}
           alt={`${shown.label} ${shown.caption}`}

@@ -37,8 +37,7 @@ export function PickDialog({ title, none, choices, isOpen, onClose, onPick }: Pr
                 onClick={() => onPick(choice.id)}
               >
                 {choice.picture && (
-                  // Behind the session's cookie, so the framework's image service cannot fetch it.
-                  // eslint-disable-next-line @next/next/no-img-element
+                  // eslint-disable-next-line @next/next/no-img-element -- its address asks for the sign-in, which the framework's image service does not have
                   <img
                     src={choice.picture}
                     alt=""

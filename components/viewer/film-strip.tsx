@@ -22,8 +22,7 @@ export function FilmStrip({ caseId, film, currentId }: Props) {
               )}
             >
               {picture.state === "ready" && (
-                // Behind the session's cookie, so the framework's image service cannot fetch it.
-                // eslint-disable-next-line @next/next/no-img-element
+                // eslint-disable-next-line @next/next/no-img-element -- its address asks for the sign-in, which the framework's image service does not have
                 <img
                   src={routes.api.thumbnail(picture.id)}
                   alt=""

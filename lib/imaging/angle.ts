@@ -40,10 +40,11 @@ export function bearingDeg([fromX, fromY]: Point, [toX, toY]: Point): number | n
   return wrapDeg(Math.atan2(x, -y) * DEGREES);
 }
 
-/** The same direction between 0 and 360 degrees. */
+/** The same direction from 0 up to, not including, 360 degrees. */
 export function wrapDeg(degrees: number): number {
-  const wrapped = degrees % 360;
-  return wrapped < 0 ? wrapped + 360 : wrapped;
+  const wrapped = ((degrees % 360) + 360) % 360;
+  // A hair below 0 rounds to 360, and the remainder of a negative whole turn is -0.
+  return wrapped === 0 ? 0 : wrapped;
 }
 
 /** Smallest arc that holds all directions, in degrees; 0 for one direction, null for none. */

@@ -1,4 +1,4 @@
-import { refuse, type Refusal } from "@/lib/numerics/verdict";
+import { isPositive, refuse, type Refusal } from "@/lib/numerics/verdict";
 import { mmFromUm, umFromMm } from "@/lib/units/length";
 import { distancePx, type Point } from "./point";
 import { combined, COVERAGE_FACTOR } from "./uncertainty";
@@ -10,6 +10,8 @@ export type PixelSize = { readonly umPerPx: number; readonly relativeUncertainty
 export const LEAST_SCALE_PX = 20;
 /** Pixels whose two sides differ by more than this share are not square, and one scale is wrong. */
 const SQUARE_WITHIN = 0.005;
+
+const isUncertainty = (value: number) => Number.isFinite(value) && value >= 0;
 
 /**
  * Pixel size from two points of known distance: s = D / N, and
@@ -23,13 +25,19 @@ export function pixelSizeFromTwoPoints(input: {
   readonly knownDistanceMm: number;
   readonly knownDistanceUncertaintyMm: number;
   readonly pickUncertaintyPx: number;
-}): PixelSize | Refusal<"too_near" | "not_positive"> {
+}): PixelSize | Refusal<"too_near" | "not_positive" | "bad_uncertainty" | "not_a_place"> {
   const { points, knownDistanceMm, knownDistanceUncertaintyMm, pickUncertaintyPx } = input;
-  if (!(knownDistanceMm > 0) || !(knownDistanceUncertaintyMm >= 0) || !(pickUncertaintyPx >= 0)) {
-    return refuse("not_positive", "The known distance has to be above zero.");
+  if (!isPositive(knownDistanceMm)) {
+    return refuse("not_positive", "The known distance has to be a number above zero.");
+  }
+  if (!isUncertainty(knownDistanceUncertaintyMm) || !isUncertainty(pickUncertaintyPx)) {
+    return refuse("bad_uncertainty", "An uncertainty has to be a number that is not below zero.");
   }
   const apartPx = distancePx(...points);
-  if (!(apartPx >= LEAST_SCALE_PX)) {
+  if (!Number.isFinite(apartPx)) {
+    return refuse("not_a_place", "A point of the scale is no place on a picture.");
+  }
+  if (apartPx < LEAST_SCALE_PX) {
     return refuse(
       "too_near",
       `The two points are ${apartPx.toFixed(1)} px apart. Take points at least ${LEAST_SCALE_PX} px apart, better the whole scale bar.`,
@@ -53,9 +61,12 @@ export function pixelSizeFromTwoPoints(input: {
 export function pixelSizeFromFile(
   file: { readonly umPerPxX: number | null; readonly umPerPxY: number | null },
   relativeUncertainty: number,
-): PixelSize | Refusal<"no_resolution" | "not_square"> {
+): PixelSize | Refusal<"no_resolution" | "not_square" | "bad_uncertainty"> {
   const { umPerPxX, umPerPxY } = file;
-  if (!umPerPxX || !umPerPxY || !(umPerPxX > 0) || !(umPerPxY > 0)) {
+  if (!isUncertainty(relativeUncertainty)) {
+    return refuse("bad_uncertainty", "An uncertainty has to be a number that is not below zero.");
+  }
+  if (umPerPxX === null || umPerPxY === null || !isPositive(umPerPxX) || !isPositive(umPerPxY)) {
     return refuse("no_resolution", "The file says no resolution. Set the scale from two points.");
   }
   if (Math.abs(umPerPxX / umPerPxY - 1) > SQUARE_WITHIN) {

@@ -1,4 +1,4 @@
-import type { Point } from "./point";
+import { type Point, withoutRepeats } from "./point";
 
 /** Which side of the line a-b the point c is on: positive, negative, or 0 on it. */
 function side([ax, ay]: Point, [bx, by]: Point, [cx, cy]: Point): number {
@@ -33,9 +33,11 @@ type Side = { from: Point; to: Point; index: number; least: number; most: number
 
 /**
  * Whether a closed polygon crosses or touches itself, so that its area would mean nothing. Sides are
- * swept from left to right, so an outline of thousands of corners is checked in good time.
+ * swept from left to right, so an outline of thousands of corners is checked in good time. A corner
+ * given twice in a row is one corner: a side without length crosses nothing.
  */
-export function crossesItself(points: readonly Point[]): boolean {
+export function crossesItself(corners: readonly Point[]): boolean {
+  const points = withoutRepeats(corners);
   const count = points.length;
   const sides: Side[] = [];
   for (const [index, from] of points.entries()) {

@@ -15,17 +15,10 @@ export function polylineLengthPx(points: readonly Point[]): number {
   return sum;
 }
 
-/** Smallest upright box around points; null of none. */
-export function boundsPx(
-  points: readonly Point[],
-): { left: number; top: number; right: number; bottom: number } | null {
-  if (points.length === 0) return null;
-  const bounds = { left: Infinity, top: Infinity, right: -Infinity, bottom: -Infinity };
-  for (const [x, y] of points) {
-    bounds.left = Math.min(bounds.left, x);
-    bounds.right = Math.max(bounds.right, x);
-    bounds.top = Math.min(bounds.top, y);
-    bounds.bottom = Math.max(bounds.bottom, y);
-  }
-  return bounds;
+/** The corners of a closed shape without those that repeat the one before, as a shaky press gives. */
+export function withoutRepeats(corners: readonly Point[]): Point[] {
+  return corners.filter(([x, y], i) => {
+    const before = corners[(i - 1 + corners.length) % corners.length];
+    return corners.length === 1 || !before || before[0] !== x || before[1] !== y;
+  });
 }

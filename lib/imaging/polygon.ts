@@ -1,4 +1,4 @@
-import type { Point } from "./point";
+import { type Point, withoutRepeats } from "./point";
 
 /** Twice the signed area, by the shoelace formula (mathematics; Gauss). */
 function twiceSignedArea(points: readonly Point[]): number {
@@ -43,9 +43,11 @@ export function isInside([x, y]: Point, points: readonly Point[]): boolean {
 /**
  * Standard uncertainty of a polygon's area from picking its corners, each coordinate with the
  * standard uncertainty `pickPx`: u(A)2 = u2 sum (dA/dx)2 + (dA/dy)2, where dA/dx of a corner is half
- * the difference of its neighbours' y, and dA/dy that of their x (GUM JCGM 100:2008, 5.1.2).
+ * the difference of its neighbours' y, and dA/dy that of their x (GUM JCGM 100:2008, 5.1.2). A
+ * corner given twice in a row was picked once.
  */
-export function polygonPickUncertaintyPx2(points: readonly Point[], pickPx: number): number {
+export function polygonPickUncertaintyPx2(corners: readonly Point[], pickPx: number): number {
+  const points = withoutRepeats(corners);
   let squares = 0;
   points.forEach((_, i) => {
     const before = points[(i - 1 + points.length) % points.length];

@@ -33,8 +33,7 @@ export function PictureCard({ caseId, picture, items, mayDescribe }: Props) {
   const isOpenable = state === "ready";
   const title = content.caption || picture.fileName;
   const thumbnail = isOpenable ? (
-    // A thumbnail is 320 px already, and its address asks for the sign-in.
-    // eslint-disable-next-line @next/next/no-img-element
+    // eslint-disable-next-line @next/next/no-img-element -- its address asks for the sign-in, which the framework's image service does not have
     <img
       src={routes.api.thumbnail(id)}
       alt=""
