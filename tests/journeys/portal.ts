@@ -25,9 +25,10 @@ type Window = { page: Page; faults: string[] };
 export async function signedOut(
   browser: Browser,
   { width = 1440, height = 900, theme = "light" }: Look = {},
+  baseURL = baseUrl(),
 ): Promise<Window> {
   const context = await browser.newContext({
-    baseURL: baseUrl(),
+    baseURL,
     viewport: { width, height },
     colorScheme: theme,
   });
@@ -41,8 +42,13 @@ export async function signedOut(
 }
 
 /** A window of its own, signed in. */
-export async function signedIn(browser: Browser, email: string, look?: Look): Promise<Window> {
-  const { page, faults } = await signedOut(browser, look);
+export async function signedIn(
+  browser: Browser,
+  email: string,
+  look?: Look,
+  baseURL?: string,
+): Promise<Window> {
+  const { page, faults } = await signedOut(browser, look, baseURL);
   await page.goto("/sign-in");
   await page.getByLabel("E-mail").fill(email);
   await page.getByLabel("Password", { exact: true }).fill(DEMO_PASSWORD);
