@@ -53,6 +53,8 @@ export async function work(signal: AbortSignal, concurrency: number): Promise<vo
 }
 
 function pause(ms: number, signal: AbortSignal): Promise<void> {
+  // A signal that came while the queue was asked fires no event any more.
+  if (signal.aborted) return Promise.resolve();
   return new Promise((resolve) => {
     const timer = setTimeout(resolve, ms);
     signal.addEventListener("abort", () => (clearTimeout(timer), resolve()), { once: true });
