@@ -2,6 +2,7 @@ import "server-only";
 import { randomUUID } from "node:crypto";
 import { log } from "@/lib/log";
 import { handlers } from "./handlers";
+import { pause } from "./pause";
 import { claim, complete, fail, heartbeat, type Job, LEASE_MS, reclaimLost } from "./queue";
 
 const POLL_MS = 700;
@@ -50,13 +51,4 @@ export async function work(signal: AbortSignal, concurrency: number): Promise<vo
     }
   };
   await Promise.all([reaper(), ...Array.from({ length: concurrency }, lane)]);
-}
-
-function pause(ms: number, signal: AbortSignal): Promise<void> {
-  // A signal that came while the queue was asked fires no event any more.
-  if (signal.aborted) return Promise.resolve();
-  return new Promise((resolve) => {
-    const timer = setTimeout(resolve, ms);
-    signal.addEventListener("abort", () => (clearTimeout(timer), resolve()), { once: true });
-  });
 }
