@@ -24,6 +24,7 @@ import {
   asSecondLead,
   asTechnician,
 } from "../../helpers/people";
+import { refusal } from "../../helpers/refusal";
 import {
   aSignableCase,
   aWrittenCase,
@@ -35,15 +36,6 @@ import {
   theIssue,
   write,
 } from "../../helpers/signable-case";
-
-async function refusal(work: Promise<unknown>): Promise<AppError> {
-  const error: unknown = await work.then(
-    () => new Error("it was not refused"),
-    (reason: unknown) => reason,
-  );
-  if (error instanceof AppError) return error;
-  throw error;
-}
 
 let lead: Actor;
 let signInId: string;
