@@ -5,7 +5,7 @@ import { classNames } from "@/components/ui/class-names";
 import { Menu, MenuItem } from "@/components/ui/menu";
 import { Shape } from "@/components/ui/shapes";
 import { formatNumber } from "@/lib/format/numbers";
-import { reportedHardness } from "@/lib/hardness/report-rounding";
+import { reportedHardness, reportedStrengthMpa } from "@/lib/hardness/report-rounding";
 import type { Scale } from "@/lib/hardness/scales";
 import type { ConvertedHardness, ResultContent, TypedReading } from "@/lib/traverses/schemas";
 import { EndOfTableMark } from "./end-of-table-mark";
@@ -38,7 +38,7 @@ function ConvertedCell({ of, isOut }: { of: ConvertedHardness | undefined; isOut
     of.value === null
       ? null
       : of.to === "Rm_MPa"
-        ? formatNumber(Math.round(of.value / 5) * 5)
+        ? formatNumber(reportedStrengthMpa(of.value))
         : formatNumber(of.value, { decimals: 1 });
   return (
     <td

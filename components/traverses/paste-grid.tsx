@@ -3,11 +3,13 @@
 import { useVirtualizer } from "@tanstack/react-virtual";
 import {
   useCallback,
+  useImperativeHandle,
   useMemo,
   useRef,
   type ClipboardEvent,
   type KeyboardEvent,
   type ReactNode,
+  type Ref,
 } from "react";
 import { classNames } from "@/components/ui/class-names";
 import { Kbd } from "@/components/ui/kbd";
@@ -39,7 +41,10 @@ export type PasteGridProps = {
   onAct: (act: RowAct, id: string) => void;
   /** At the foot: what can be done with the whole table. */
   acts: ReactNode;
+  /** Lets the station bring a row into view and put the cursor into its depth. */
+  handle: Ref<GridHandle>;
 };
+export type GridHandle = { show: (row: number) => void };
 
 function cellAt(target: EventTarget): { row: number; cell: string } | null {
   if (!(target instanceof HTMLInputElement)) return null;
@@ -53,7 +58,7 @@ export function PasteGrid(props: PasteGridProps) {
   const box = useRef<HTMLDivElement>(null);
   const rowCount = content.readings.length + (isReadOnly ? 0 : 1);
   const isVirtual = rowCount > VIRTUAL_FROM;
-  // eslint-disable-next-line react-hooks/incompatible-library -- nothing here is memoized by a compiler
+  // eslint-disable-next-line react-hooks/incompatible-library -- no compiler memoizes what it returns
   const virtualizer = useVirtualizer({
     count: rowCount,
     getScrollElement: () => box.current,
@@ -81,6 +86,8 @@ export function PasteGrid(props: PasteGridProps) {
     },
     [isVirtual, virtualizer],
   );
+
+  useImperativeHandle(props.handle, () => ({ show: (row) => goTo(row, "depth") }), [goTo]);
 
   function onKeyDown(event: KeyboardEvent) {
     const at = cellAt(event.target);
@@ -238,8 +245,8 @@ export function PasteGrid(props: PasteGridProps) {
       <div className="no-print flex items-center gap-2 border-t border-rule px-3 py-1.5 text-12 text-ink-3">
         {isReadOnly ? null : (
           <p>
-            Row {content.readings.length + 1}: type or paste. <Kbd>Tab</Kbd> next, <Kbd>Enter</Kbd>{" "}
-            down, <Kbd>Ctrl</Kbd> <Kbd>V</Kbd> block.
+            Row {content.readings.length + 1}: type, or paste a block with <Kbd>Ctrl</Kbd>{" "}
+            <Kbd>V</Kbd>. <Kbd>Tab</Kbd> goes on, <Kbd>Enter</Kbd> down.
           </p>
         )}
         <div className="ml-auto">{props.acts}</div>

@@ -5,6 +5,7 @@ import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
 import { NumberField, TextAreaField } from "@/components/ui/labelled-fields";
 import { RadioGroup } from "@/components/ui/radio-group";
+import { tidyCell } from "@/lib/traverses/edit-readings";
 import { readCell, type CellName } from "@/lib/traverses/typed-cells";
 
 export type Asked = {
@@ -44,7 +45,7 @@ export function ReasonDialog({
   const title =
     kind === "zigzag" ? words.title : `${words.title} ${chosen ? `indent ${chosen.number}` : of}?`;
   function answer() {
-    const text = typed.trim();
+    const text = kind === "zigzag" ? tidyCell(typed) : typed.trim();
     if (kind === "zigzag") {
       const name: CellName = "lateral";
       const { value } = readCell(name, text);

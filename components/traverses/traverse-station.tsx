@@ -1,11 +1,7 @@
 "use client";
 
-import { useCallback, useMemo, useState } from "react";
+import { useCallback, useMemo, useRef, useState } from "react";
 import { ChartPanel } from "@/components/charts/chart-panel";
-import { NoCopyNotice } from "@/components/forms/no-copy-notice";
-import { Button } from "@/components/ui/button";
-import { Notice } from "@/components/ui/notice";
-import { Shape } from "@/components/ui/shapes";
 import { parseBlock } from "@/lib/hardness/parse-block";
 import type { TableId } from "@/lib/hardness/published-tables";
 import { chartOfTraverse, type ShownTraverse } from "@/lib/traverses/chart-of-traverse";
@@ -18,7 +14,8 @@ import type { CellName } from "@/lib/traverses/typed-cells";
 import { ConflictNotice } from "./conflict-notice";
 import { entryModeOf, typedColumns, type EntryMode } from "./grid-columns";
 import type { RowAct } from "./grid-row";
-import { PasteGrid } from "./paste-grid";
+import { type GridHandle, PasteGrid } from "./paste-grid";
+import { type Paste, PasteNote } from "./paste-note";
 import { ReasonDialog, type Asked } from "./reason-dialog";
 import { ResultCautions, ResultStrip } from "./result-strip";
 import { saveFile } from "./save-file";
@@ -27,6 +24,7 @@ import { SettingsBar } from "./settings-bar";
 import { SettingsPanel } from "./settings-panel";
 import { indentsOf, putBack, takeReasonBack, withAnswer } from "./settle-indents";
 import { SettleList, type SettleAct } from "./settle-list";
+import { StationNotices } from "./station-notices";
 import { TableMenu } from "./table-menu";
 import { TraverseTabs, type TraverseTab } from "./traverse-tabs";
 import { useAutosave, type SaveTraverse } from "./use-autosave";
@@ -57,13 +55,12 @@ export type StationProps = {
   onWithdraw: ((reason: string) => void) | null;
 };
 
-type Paste = { kind: "read" | "refused"; text: string };
-
 /** One traverse at work: table, profile, results, and what is to settle. */
 export function TraverseStation(props: StationProps) {
   const { traverse, others, enabledTableIds, readOnlyBecause } = props;
   const { traverseId, label } = traverse;
   const isReadOnly = readOnlyBecause !== null;
+  const grid = useRef<GridHandle>(null);
   const editor = useTraverseEditor(traverse.content);
   const { content } = editor;
   const { filled, result, problems, flagged } = useLiveResult(content, {
@@ -143,8 +140,7 @@ export function TraverseStation(props: StationProps) {
     else if (act.kind === "take-back")
       change((now) => ({ ...now, readings: takeReasonBack(now.readings, act.ids) }));
     else if (act.kind === "show") {
-      const row = content.readings.findIndex(({ id }) => act.ids.includes(id));
-      document.querySelector<HTMLInputElement>(`[data-cell="${row}:depth"]`)?.focus();
+      grid.current?.show(content.readings.findIndex(({ id }) => act.ids.includes(id)));
     } else setAsked({ kind: act.kind, indents: indentsOf(act.ids, result) });
   }
 
@@ -187,48 +183,14 @@ export function TraverseStation(props: StationProps) {
           />
         </div>
       </div>
-      {readOnlyBecause === null ? null : (
-        <Notice kind="readonly" title="Read only." className="mx-4 mb-3">
-          {readOnlyBecause}
-        </Notice>
-      )}
-      {isRestored ? (
-        <Notice
-          kind="note"
-          className="mx-4 mb-3"
-          live="polite"
-          actions={
-            <Button small onClick={() => setRestored(false)}>
-              Close
-            </Button>
-          }
-        >
-          What you typed here was kept on this device and is put back. It is being saved.
-        </Notice>
-      ) : null}
-      {state.kind === "failed" ? (
-        <Notice
-          kind="bad"
-          title={`${label} was not saved.`}
-          className="mx-4 mb-3"
-          live="assertive"
-          actions={
-            <Button small onClick={autosave.retry}>
-              Try again
-            </Button>
-          }
-        >
-          {state.message} {Object.values(state.fields).join(" ")} What you typed is kept here.
-        </Notice>
-      ) : null}
-      {autosave.keepsCopy ? null : <NoCopyNotice className="mx-4 mb-3" />}
-      {state.kind === "offline" ? (
-        <Notice kind="offline" title="No connection." className="mx-4 mb-3" live="polite">
-          You can go on; your changes are kept{" "}
-          {autosave.keepsCopy ? "on this device" : "on this page only, so leave it open,"} and saved
-          when it is back.
-        </Notice>
-      ) : null}
+      <StationNotices
+        label={label}
+        readOnlyBecause={readOnlyBecause}
+        state={state}
+        keepsCopy={autosave.keepsCopy}
+        onRetry={autosave.retry}
+        onRestoredSeen={isRestored ? () => setRestored(false) : null}
+      />
       {state.kind === "conflict" ? (
         <ConflictNotice
           message={state.message}
@@ -257,28 +219,16 @@ export function TraverseStation(props: StationProps) {
           className="flex max-h-[calc(100dvh-10.5rem)] flex-col overflow-hidden rounded-4 border border-rule-2 bg-surface print:max-h-none"
         >
           {paste === null ? null : (
-            <p
-              role="status"
-              className={`no-print flex min-h-9 items-center gap-2 border-b border-rule-2 px-3 py-1.5 text-13 ${paste.kind === "read" ? "bg-met-tint" : "bg-bad-tint"}`}
-            >
-              <Shape
-                name={paste.kind === "read" ? "tick" : "triangle"}
-                className={paste.kind === "read" ? "text-met" : "text-bad"}
-              />
-              <span className="flex-1">{paste.text}</span>
-              <button
-                type="button"
-                className="text-action underline underline-offset-[3px]"
-                onClick={() => {
-                  if (paste.kind === "read") editor.undo();
-                  setPaste(null);
-                }}
-              >
-                {paste.kind === "read" ? "Undo" : "Close"}
-              </button>
-            </p>
+            <PasteNote
+              paste={paste}
+              onAct={() => {
+                if (paste.kind === "read") editor.undo();
+                setPaste(null);
+              }}
+            />
           )}
           <PasteGrid
+            handle={grid}
             content={content}
             result={result}
             columns={columns}

@@ -1,6 +1,6 @@
 "use client";
 
-import { useReducer } from "react";
+import { useCallback, useReducer } from "react";
 import type { TraverseContent } from "@/lib/traverses/schemas";
 
 const STEPS_KEPT = 100;
@@ -40,12 +40,16 @@ function reduce(state: State, change: Change): State {
 /** A traverse as it is being typed, with undo. */
 export function useTraverseEditor(initial: TraverseContent) {
   const [state, send] = useReducer(reduce, { content: initial, past: [], lastStep: null });
+  const change = useCallback(
+    (make: (content: TraverseContent) => TraverseContent, step: string | null = null) =>
+      send({ kind: "change", step, make }),
+    [],
+  );
   return {
     content: state.content,
     canUndo: state.past.length > 0,
     /** `step` names the cell or field: typing on in the same one is one step of undo. */
-    change: (make: (content: TraverseContent) => TraverseContent, step: string | null = null) =>
-      send({ kind: "change", step, make }),
+    change,
     replace: (content: TraverseContent) => send({ kind: "replace", content }),
     undo: () => send({ kind: "undo" }),
   };

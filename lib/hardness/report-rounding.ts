@@ -25,3 +25,11 @@ export function reportedHardness(value: number, scale: ReportedScale): string | 
 export function hardnessStatement(value: number, scale: ReportedScale, symbol: string): string {
   return `${reportedHardness(value, scale) ?? "\u2013"}\u00a0${symbol}`;
 }
+
+/** Strength out of a hardness table is good to some tens of MPa at best (common practice). */
+const STRENGTH_STEP_MPA = 5;
+
+/** A tensile strength estimated from hardness, MPa, to the five it is shown with. */
+export function reportedStrengthMpa(strengthMpa: number): number {
+  return Math.round(strengthMpa / STRENGTH_STEP_MPA) * STRENGTH_STEP_MPA;
+}

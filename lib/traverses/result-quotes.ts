@@ -1,19 +1,17 @@
 import { formatHardness } from "@/lib/format/hardness";
 import { formatQuantity, formatWithUncertainty } from "@/lib/format/numbers";
 import { NO_BREAK_SPACE } from "@/lib/format/marks";
+import { reportedStrengthMpa } from "@/lib/hardness/report-rounding";
 import { SCALES } from "@/lib/hardness/scales";
 import type { CitableValue, CitableValues } from "@/lib/records/constants";
 import type { ConvertedHardness, ResultContent } from "./schemas";
-
-/** Strength out of a table is good to some tens of MPa at best; it is shown to five. */
-const STRENGTH_STEP_MPA = 5;
 
 /** "≈ 56.9 HRC", "≈ 965 MPa"; null where the table gives no value. */
 export function convertedText({ to, value }: ConvertedHardness): string | null {
   if (value === null) return null;
   if (to === "Rm_MPa") {
-    const shown = Math.round(value / STRENGTH_STEP_MPA) * STRENGTH_STEP_MPA;
-    return `≈${NO_BREAK_SPACE}${formatQuantity(shown, "MPa", { decimals: 0 })}`;
+    const shown = formatQuantity(reportedStrengthMpa(value), "MPa", { decimals: 0 });
+    return `≈${NO_BREAK_SPACE}${shown}`;
   }
   return formatHardness({ value, scale: SCALES[to].symbol, converted: true });
 }
