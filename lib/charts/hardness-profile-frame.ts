@@ -1,7 +1,8 @@
-import { scaleLinear } from "d3-scale";
+import { type ScaleLinear, scaleLinear } from "d3-scale";
 import type { HardnessProfileInput, ProfilePoint } from "./hardness-profile-input";
 import type { Box } from "./label-space";
 import type { ChartToken, Primitive } from "./primitives";
+import { estimateTextWidthPx } from "./text-width";
 
 export type ProfileTokens = {
   ground: ChartToken;
@@ -45,6 +46,8 @@ export type ProfileFrame = {
 
 const MARGIN_PX = { left: 52, top: 16, bottom: 46, rightPlain: 16, rightScale: 54 };
 const LEAST_RANGE_HV = 100;
+/** Between two labels of the depth axis. */
+const LABEL_GAP_PX = 10;
 const AXIS_TEXT = { sizePx: 12, weight: 400 } as const;
 
 export function isDrawable(point: ProfilePoint): boolean {
@@ -69,7 +72,7 @@ export function frameOf(input: HardnessProfileInput): ProfileFrame {
     plot,
     xOf: (depthMm) => x(depthMm),
     yOf: (hardnessHv) => y(hardnessHv),
-    xTicks: x.ticks(Math.max(2, Math.round(plot.width / 55))),
+    xTicks: depthTicks(x, plot.width),
     yTicks: y.ticks(5),
     yMinorTicks,
     yRangeHv: [y.domain()[0] ?? 0, y.domain()[1] ?? 1],
@@ -86,6 +89,20 @@ function depthScale(input: HardnessProfileInput, points: readonly ProfilePoint[]
   }
   const span = high - low > 0 ? high - low : 1;
   return scaleLinear().domain([low, low + span * 1.02]);
+}
+
+/** As many round depths as their labels leave room for. */
+function depthTicks(x: ScaleLinear<number, number>, widthPx: number): number[] {
+  for (let wanted = Math.max(2, Math.round(widthPx / 55)); wanted > 1; wanted--) {
+    const ticks = x.ticks(wanted);
+    const textOf = tickText(ticks);
+    const widest = Math.max(
+      ...ticks.map((tick) => estimateTextWidthPx(textOf(tick), AXIS_TEXT.sizePx)),
+    );
+    const [first = 0, second = Infinity] = ticks.map((tick) => x(tick));
+    if (second - first >= widest + LABEL_GAP_PX) return ticks;
+  }
+  return x.ticks(1);
 }
 
 function hardnessScale(input: HardnessProfileInput, points: readonly ProfilePoint[]) {

@@ -57,6 +57,32 @@ describe("hardness profile", () => {
     expect(crossing?.y).toBeCloseTo(expected, 6);
   });
 
+  it.each([0.04, 0.5, 4, 35, 3000, 250_000])(
+    "keeps the labels of the depth axis apart over %s mm",
+    (deepestMm) => {
+      for (const widthPx of [320, 640, 1300]) {
+        const drawn = hardnessProfile(
+          profileInput({
+            size: { widthPx, heightPx: 344 },
+            requiredDepth: undefined,
+            series: [{ label: "T", points: [point(0, 600), point(deepestMm, 400)] }],
+          }),
+        );
+        const labels = all(drawn, "text")
+          .filter((mark) => mark.anchor === "middle" && /^[\d.]+$/.test(mark.text))
+          .sort((a, b) => a.x - b.x);
+        expect(labels.length).toBeGreaterThan(1);
+        for (const [i, label] of labels.entries()) {
+          const next = labels[i + 1];
+          if (!next) continue;
+          const halves =
+            (estimateTextWidthPx(label.text, 12) + estimateTextWidthPx(next.text, 12)) / 2;
+          expect(next.x - label.x).toBeGreaterThan(halves);
+        }
+      }
+    },
+  );
+
   it("draws the grey bar as wide as the uncertainty on both sides", () => {
     const bar = all(chart, "rect").find(({ opacity }) => opacity === 0.28);
     const perMm = textAt(chart, "2.0").x - textAt(chart, "1.0").x;
