@@ -3,7 +3,7 @@ import type { CalibrateImage } from "@/lib/images/calibration-schemas";
 import type { ChangeMark, PlaceMark } from "@/lib/images/mark-schemas";
 
 type Written = { recordId: string; number: number; label: string };
-type Answer<T> =
+export type BenchAnswer<T> =
   | { ok: true; value: T }
   | {
       ok: false;
@@ -12,14 +12,13 @@ type Answer<T> =
 
 /** What the bench asks of the server. */
 export type BenchActs = {
-  place: (mark: PlaceMark) => Promise<Answer<Written>>;
-  change: (mark: ChangeMark) => Promise<Answer<Written>>;
+  place: (mark: PlaceMark) => Promise<BenchAnswer<Written>>;
+  change: (mark: ChangeMark) => Promise<BenchAnswer<Written>>;
   remove: (mark: {
     markId: string;
     seenVersion: number;
     reason?: string;
-  }) => Promise<Answer<unknown>>;
-  restore: (mark: { markId: string }) => Promise<Answer<unknown>>;
-  setScale: (scale: CalibrateImage) => Promise<Answer<{ label: string; recomputed: number }>>;
+  }) => Promise<BenchAnswer<unknown>>;
+  restore: (mark: { markId: string }) => Promise<BenchAnswer<unknown>>;
+  setScale: (scale: CalibrateImage) => Promise<BenchAnswer<{ label: string; recomputed: number }>>;
 };
-export type BenchError = Extract<Answer<unknown>, { ok: false }>["error"];

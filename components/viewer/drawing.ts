@@ -102,6 +102,31 @@ export function closesArea(
   );
 }
 
+export type Drawing = {
+  tool: DrawingTool;
+  points: readonly Point[];
+  options: DrawingOptions;
+};
+
+/**
+ * What a press at `at` makes of a drawing: its points, and the shape when that ends it. The second
+ * press of a double press ends a shape without a fixed number of points and adds nothing to any.
+ */
+export function afterPress(
+  { tool, points, options }: Drawing,
+  at: Point,
+  { isSecond, scale }: { isSecond: boolean; scale: number },
+): { points: readonly Point[]; done: Geometry | null } {
+  const all = completeAt(tool, options);
+  if (isSecond) return { points, done: all === null ? shapeOf(tool, points, options) : null };
+  if (closesArea(tool, points, at, scale)) return { points, done: shapeOf(tool, points, options) };
+  // A shape that is whole but not saved is drawn anew.
+  const next = all !== null && points.length >= all ? [at] : [...points, at];
+  // A note is saved when its words are written.
+  const isWhole = next.length === all && tool !== "note";
+  return { points: next, done: isWhole ? shapeOf(tool, next, options) : null };
+}
+
 /** Moves one point of a shape; the order is that of `pointsOf`. */
 export function withPointMoved(geometry: Geometry, index: number, to: Point): Geometry {
   const at: [number, number] = [to[0], to[1]];

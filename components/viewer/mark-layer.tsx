@@ -1,25 +1,28 @@
 "use client";
 
+import type { PointerEvent } from "react";
 import type { BenchMark } from "@/lib/images/bench-state";
 import { markPath } from "@/lib/images/mark-layout";
 import { type Geometry, pointsOf } from "@/lib/images/mark-schemas";
 import type { Point } from "@/lib/imaging/point";
 import { MarkPoints, MarkShape } from "./mark-shape";
 import { MarkTag } from "./mark-tag";
+import type { Editing } from "./use-point-edits";
 import { toPicture, toScreen, type View } from "./view";
 
 type Props = {
   view: View;
   marks: readonly BenchMark[];
   chosenId: string | null;
-  /** Shape of the chosen mark while its points are moved; null otherwise. */
-  edited: Geometry | null;
+  /** The mark whose points are being moved; null otherwise. */
+  editing: Editing | null;
   drawn: { shape: Geometry | null; points: readonly Point[] };
   /** Cross for marking by keys; null while the mouse is used. */
   cross: Point | null;
   canChoose: boolean;
   onChoose: (id: string) => void;
-  onMovePoint: (index: number, to: Point) => void;
+  onChoosePoint: (index: number) => void;
+  onMovePoint: (to: Point, index: number) => void;
 };
 
 /** Marks over the picture: shapes in its pixels, labels and handles in those of the screen. */
@@ -27,37 +30,42 @@ export function MarkLayer({
   view,
   marks,
   chosenId,
-  edited,
+  editing,
   drawn,
   cross,
   canChoose,
   onChoose,
+  onChoosePoint,
   onMovePoint,
 }: Props) {
   const shown = marks.map((mark) => ({
     mark,
-    geometry: mark.id === chosenId && edited ? edited : mark.content.geometry,
+    geometry: mark.id === editing?.mark.id ? editing.geometry : mark.content.geometry,
     isChosen: mark.id === chosenId,
+    // Origins, notes and counts have no line to press, so the points and the label are pressed too.
+    press: canChoose && {
+      className: "pointer-events-auto cursor-pointer",
+      onPointerDown: (event: PointerEvent) => {
+        event.stopPropagation();
+        onChoose(mark.id);
+      },
+    },
   }));
   const crossAt = cross && toScreen(cross, view);
   return (
     <svg className="pointer-events-none absolute inset-0 size-full" aria-hidden="true">
       <g transform={`translate(${view.x} ${view.y}) scale(${view.scale})`}>
-        {shown.map(({ mark, geometry, isChosen }) => (
+        {shown.map(({ mark, geometry, isChosen, press }) => (
           <g key={mark.id}>
             <MarkShape geometry={geometry} strong={isChosen} />
-            {canChoose && (
+            {press && (
               <path
+                {...press}
                 d={markPath(geometry)}
                 fill="none"
                 stroke="transparent"
                 strokeWidth={14}
                 vectorEffect="non-scaling-stroke"
-                className="pointer-events-auto cursor-pointer"
-                onPointerDown={(event) => {
-                  event.stopPropagation();
-                  onChoose(mark.id);
-                }}
               />
             )}
           </g>
@@ -74,8 +82,8 @@ export function MarkLayer({
           />
         )}
       </g>
-      {shown.map(({ mark, geometry, isChosen }) => (
-        <g key={mark.id}>
+      {shown.map(({ mark, geometry, isChosen, press }) => (
+        <g key={mark.id} {...press}>
           <MarkPoints geometry={geometry} view={view} />
           <MarkTag
             caption={mark.caption}
@@ -101,36 +109,17 @@ export function MarkLayer({
           />
         );
       })}
-      {edited &&
-        pointsOf(edited).map((point, i) => {
-          const [x, y] = toScreen(point, view);
-          return (
-            <rect
-              key={i}
-              x={x - 7}
-              y={y - 7}
-              width={14}
-              height={14}
-              fill="#000"
-              stroke="#fff"
-              strokeWidth={2}
-              className="pointer-events-auto cursor-move"
-              onPointerDown={(event) => {
-                event.stopPropagation();
-                event.currentTarget.setPointerCapture(event.pointerId);
-              }}
-              onPointerMove={(event) => {
-                if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
-                const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
-                if (box)
-                  onMovePoint(
-                    i,
-                    toPicture([event.clientX - box.left, event.clientY - box.top], view),
-                  );
-              }}
-            />
-          );
-        })}
+      {editing &&
+        pointsOf(editing.geometry).map((point, i) => (
+          <Handle
+            key={i}
+            at={point}
+            view={view}
+            isChosen={i === editing.index}
+            onChoose={() => onChoosePoint(i)}
+            onMove={(to) => onMovePoint(to, i)}
+          />
+        ))}
       {crossAt && (
         <path
           d={`M${crossAt[0] - 14} ${crossAt[1]}h28M${crossAt[0]} ${crossAt[1] - 14}v28`}
@@ -140,5 +129,43 @@ export function MarkLayer({
         />
       )}
     </svg>
+  );
+}
+
+/** A point that can be dragged: small to see, large to hit. */
+function Handle(props: {
+  at: Point;
+  view: View;
+  isChosen: boolean;
+  onChoose: () => void;
+  onMove: (to: Point) => void;
+}) {
+  const [x, y] = toScreen(props.at, props.view);
+  return (
+    <g
+      className="pointer-events-auto cursor-move"
+      onPointerDown={(event) => {
+        event.stopPropagation();
+        event.currentTarget.setPointerCapture(event.pointerId);
+        props.onChoose();
+      }}
+      onPointerMove={(event) => {
+        if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
+        const box = event.currentTarget.ownerSVGElement?.getBoundingClientRect();
+        if (!box) return;
+        props.onMove(toPicture([event.clientX - box.left, event.clientY - box.top], props.view));
+      }}
+    >
+      <circle cx={x} cy={y} r={12} fill="transparent" className="pointer-coarse:[r:22px]" />
+      <rect
+        x={x - 7}
+        y={y - 7}
+        width={14}
+        height={14}
+        fill={props.isChosen ? "#fff" : "#000"}
+        stroke={props.isChosen ? "#000" : "#fff"}
+        strokeWidth={2}
+      />
+    </g>
   );
 }

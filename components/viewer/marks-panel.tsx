@@ -82,14 +82,14 @@ export function MarksPanel(props: Props) {
           <p className="text-ib-ink-2">
             {chosen.by}, {chosen.content.confidence}
           </p>
-          {refusal === null && (
+          {refusal === null && !props.isEditing && (
             <div className="flex gap-2">
               <button
                 type="button"
                 className={benchButton({ small: true })}
                 onClick={() => props.onEdit(chosen)}
               >
-                {props.isEditing ? "Save the points" : "Edit points"}
+                Edit points
               </button>
               <button
                 type="button"

@@ -3,6 +3,7 @@
 import type { Viewer } from "openseadragon";
 import { type RefObject, useCallback, useEffect, useRef, useState } from "react";
 import type { Point } from "@/lib/imaging/point";
+import { isSecondPress, type Press } from "./double-press";
 import type { View } from "./view";
 
 export type DeepZoom = {
@@ -20,18 +21,21 @@ export type DeepZoom = {
 
 export type PanelMargins = { left: number; top: number; right: number; bottom: number };
 
+/** One step nearer, by key or button. */
+export const ZOOM_STEP = 1.4;
 const ZOOM_SECONDS = 0.25;
 const MOST_MAGNIFIED = 16;
 
 /**
  * Opens a tiled picture in `element` and tells how it lies on the screen at every move. Presses go
- * to `onPress` in screen pixels; dragging and the wheel stay with the viewer.
+ * to `onPress` once each, in screen pixels, and say whether they are the second of a double press;
+ * dragging and the wheel stay with the viewer.
  */
 export function useDeepZoom(
   element: RefObject<HTMLElement | null>,
   infoUrl: string | null,
   margins: PanelMargins,
-  onPress: (at: Point, isDouble: boolean, view: View) => void,
+  onPress: (at: Point, isSecond: boolean, view: View) => void,
 ): DeepZoom {
   const viewer = useRef<Viewer | null>(null);
   const press = useRef(onPress);
@@ -55,6 +59,8 @@ export function useDeepZoom(
         drawer: "canvas",
         showNavigationControl: false,
         keyboardNavEnabled: false,
+        // The host has the focus and the name; the canvas inside it would be a second, nameless stop.
+        tabIndex: -1,
         animationTime: matchMedia("(prefers-reduced-motion: reduce)").matches ? 0 : ZOOM_SECONDS,
         springStiffness: 10,
         visibilityRatio: 0.2,
@@ -73,10 +79,6 @@ export function useDeepZoom(
         const far = image.imageToViewerElementCoordinates(new openSeadragon.Point(1000, 0));
         return { scale: (far.x - zero.x) / 1000, x: zero.x, y: zero.y };
       };
-      const pressed = (x: number, y: number, isDouble: boolean) => {
-        const now = look();
-        if (now) press.current([x, y], isDouble, now);
-      };
       const tell = () => {
         const next = look();
         if (!next) return;
@@ -88,11 +90,21 @@ export function useDeepZoom(
         made.addHandler(event, tell);
       }
       made.addHandler("open-failed", () => setHasFailed(true));
-      made.addHandler("canvas-click", (event) => {
-        if (event.quick) pressed(event.position.x, event.position.y, false);
-      });
-      made.addHandler("canvas-double-click", (event) => {
-        pressed(event.position.x, event.position.y, true);
+      // The viewer tells of a double press after it told of both presses, which is too late.
+      let before: Press | null = null;
+      made.addHandler("canvas-click", ({ quick, position, originalEvent }) => {
+        const now = look();
+        if (!quick || !now) return;
+        const isTouch =
+          originalEvent instanceof PointerEvent && originalEvent.pointerType === "touch";
+        const here: Press = {
+          at: [position.x, position.y],
+          timeMs: originalEvent.timeStamp,
+          isTouch,
+        };
+        const isSecond = isSecondPress(before, here);
+        before = here;
+        press.current(here.at, isSecond, now);
       });
     };
     open().catch(() => setHasFailed(true));

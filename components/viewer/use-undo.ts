@@ -1,12 +1,17 @@
 "use client";
 
-import { useCallback, useState } from "react";
+import { useCallback, useRef, useState } from "react";
 
-/** One act that can be taken back and done again. Each returns whether it worked. */
+/**
+ * How a step back or forth ended: it worked; it failed and may be tried again; or it can no longer
+ * be done, because somebody else changed the same thing, and is forgotten.
+ */
+export type StepEnd = "worked" | "failed" | "gone";
+
+/** One act that can be taken back and done again. */
 export type Undoable = {
-  words: string;
-  undo: () => Promise<boolean>;
-  redo: () => Promise<boolean>;
+  undo: () => Promise<StepEnd>;
+  redo: () => Promise<StepEnd>;
 };
 
 /** Acts of this sitting, without limit. */
@@ -14,48 +19,36 @@ export function useUndo() {
   const [done, setDone] = useState<Undoable[]>([]);
   const [undone, setUndone] = useState<Undoable[]>([]);
   const [isBusy, setBusy] = useState(false);
+  // Two quick keys come before the next drawing of the page; the second must find the first at work.
+  const isAtWork = useRef(false);
 
   const did = useCallback((act: Undoable) => {
     setDone((acts) => [...acts, act]);
     setUndone([]);
   }, []);
 
-  const step = useCallback(
-    async (
-      from: Undoable[],
-      run: (act: Undoable) => Promise<boolean>,
-      move: (act: Undoable) => void,
-    ) => {
-      const act = from.at(-1);
-      if (!act || isBusy) return;
-      setBusy(true);
-      if (await run(act)) move(act);
+  async function step(way: "undo" | "redo"): Promise<void> {
+    const act = (way === "undo" ? done : undone).at(-1);
+    if (!act || isAtWork.current) return;
+    isAtWork.current = true;
+    setBusy(true);
+    try {
+      const end = await act[way]();
+      if (end === "failed") return;
+      const [take, give] = way === "undo" ? [setDone, setUndone] : [setUndone, setDone];
+      take((acts) => acts.filter((one) => one !== act));
+      if (end === "worked") give((acts) => [...acts, act]);
+    } finally {
+      isAtWork.current = false;
       setBusy(false);
-    },
-    [isBusy],
-  );
+    }
+  }
 
   return {
     did,
     canUndo: done.length > 0 && !isBusy,
     canRedo: undone.length > 0 && !isBusy,
-    undo: () =>
-      step(
-        done,
-        (act) => act.undo(),
-        (act) => {
-          setDone((acts) => acts.slice(0, -1));
-          setUndone((acts) => [...acts, act]);
-        },
-      ),
-    redo: () =>
-      step(
-        undone,
-        (act) => act.redo(),
-        (act) => {
-          setUndone((acts) => acts.slice(0, -1));
-          setDone((acts) => [...acts, act]);
-        },
-      ),
+    undo: () => step("undo"),
+    redo: () => step("redo"),
   };
 }
