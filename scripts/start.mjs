@@ -29,6 +29,7 @@ import { supervisedRun } from "./lib/supervised-run.mjs";
 orExit(checkNodeVersion);
 const dev = process.argv.includes("--dev");
 const given = givenSettings(root);
+const distFolder = given.NEXT_DIST_DIR;
 const external = externalServices(given);
 const folder = stateFolderFor({
   root,
@@ -94,10 +95,10 @@ async function start(children) {
   await step("Starting the worker for background jobs", () => superviseWorker(context));
   if (!dev) {
     const announce = (build) => step("Building the portal (about a minute)", build);
-    await ensureBuild({ ...context, announce });
+    await ensureBuild({ ...context, announce, distFolder });
   }
   await step(`Starting the web server on 127.0.0.1:${webPort}`, () =>
-    startWeb({ ...context, mode: dev ? "dev" : "start" }),
+    startWeb({ ...context, mode: dev ? "dev" : "start", distFolder }),
   );
   children.up = true;
   sayReady(settings, performance.now() - begun);

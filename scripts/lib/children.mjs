@@ -184,14 +184,17 @@ export class Children {
   /** Stops everything, last started first, and waits until it is gone. */
   async stopAll() {
     this.#stopping = true;
-    for (const entry of [...this.#running].reverse()) {
-      signalGroup(entry.child.pid, "SIGTERM");
-      const timer = setTimeout(() => signalGroup(entry.child.pid, "SIGKILL"), GRACE_MS);
-      await entry.ended;
-      clearTimeout(timer);
-      // A grandchild that outlived its parent is still in the group.
-      signalGroup(entry.child.pid, "SIGKILL");
-    }
+    for (const entry of [...this.#running].reverse()) await this.stop(entry);
+  }
+
+  /** Stops one process that is not guarded, and waits until it is gone. */
+  async stop(entry) {
+    signalGroup(entry.child.pid, "SIGTERM");
+    const timer = setTimeout(() => signalGroup(entry.child.pid, "SIGKILL"), GRACE_MS);
+    await entry.ended;
+    clearTimeout(timer);
+    // A grandchild that outlived its parent is still in the group.
+    signalGroup(entry.child.pid, "SIGKILL");
   }
 }
 

@@ -42,7 +42,7 @@ export function effectiveSettings({ given, external, secrets, ports, webPort }) 
     ...(external.database ? {} : localDatabase(secrets, ports)),
     ...(external.store ? {} : localStore(secrets, ports)),
     ...(external.mail ? {} : localMail(ports)),
-    ...pick(given, KNOWN),
+    ...pick(given, KNOWN_SETTINGS),
   };
 }
 
@@ -72,7 +72,8 @@ function localMail(ports) {
   };
 }
 
-const KNOWN = [
+/** Every variable that can be set from outside, apart from those of the start itself. */
+export const KNOWN_SETTINGS = [
   "DATABASE_URL",
   "S3_ENDPOINT",
   "S3_PUBLIC_ENDPOINT",
