@@ -2,8 +2,9 @@ import "server-only";
 import type { Action } from "@/lib/auth/policy";
 import type { SystemAction } from "./record";
 
-/** Past-tense words for what was done; `label` is what it was done to. */
-const WORDS: Record<Action | SystemAction, (label: string) => string> = {
+/** Past-tense words for what was done; `label` is what it was done to, `isNew` unless it was there. */
+type Wording = (label: string, isNew: boolean) => string;
+const WORDS: Record<Action | SystemAction, Wording> = {
   "case.list": (l) => `listed ${l}`,
   "case.create": () => "started the field return",
   "case.editDraft": () => "filled in the field return",
@@ -24,7 +25,7 @@ const WORDS: Record<Action | SystemAction, (label: string) => string> = {
   "case.clearHold": () => "took the case off hold",
   "case.addRequestFile": (l) => `added ${l}`,
   "view.save": (l) => `kept the view ${l}`,
-  "evidence.register": (l) => `registered ${l}`,
+  "evidence.register": (l, isNew) => `${isNew ? "registered" : "described"} ${l}`,
   "evidence.handOver": (l) => `wrote the custody of ${l}`,
   "image.add": (l) => `added ${l}`,
   "image.describe": (l) => `described ${l}`,
@@ -63,9 +64,13 @@ const WORDS: Record<Action | SystemAction, (label: string) => string> = {
   "system.password": () => "set a password",
 };
 
-export function describeEvent(event: { action: string; subjectLabel: string }): string {
+type Event = { action: string; subjectLabel: string; before: unknown };
+
+export function describeEvent(event: Event): string {
   const words = Object.hasOwn(WORDS, event.action)
     ? WORDS[event.action as Action | SystemAction]
     : undefined;
-  return words ? words(event.subjectLabel) : `${event.action} ${event.subjectLabel}`;
+  return words
+    ? words(event.subjectLabel, event.before === null)
+    : `${event.action} ${event.subjectLabel}`;
 }

@@ -1,9 +1,10 @@
 "use server";
 
 import { revalidatePath } from "next/cache";
+import { describeItem } from "@/lib/evidence/describe-item";
 import { handOver } from "@/lib/evidence/hand-over";
 import { registerItem } from "@/lib/evidence/register-item";
-import { HandOverInput, RegisterItemInput } from "@/lib/evidence/schemas";
+import { DescribeItemInput, HandOverInput, RegisterItemInput } from "@/lib/evidence/schemas";
 import { action } from "@/lib/http/action";
 import { routes } from "@/lib/routes";
 
@@ -13,6 +14,15 @@ export const register = action(
     const item = await registerItem(actor, input);
     revalidatePath(routes.evidence(input.caseId));
     return item;
+  },
+);
+
+export const describe = action(
+  { permission: "evidence.register", input: DescribeItemInput },
+  async (actor, input) => {
+    const described = await describeItem(actor, input);
+    revalidatePath(routes.evidence(input.caseId));
+    return described;
   },
 );
 

@@ -45,6 +45,7 @@ export default async function EvidencePage({ params, searchParams }: Props) {
             item={chosen}
             parentLabel={evidence.items.find((item) => item.id === chosen.parentId)?.label ?? null}
             holders={evidence.holders}
+            mayDescribe={evidence.mayRegister}
             mayHandOver={evidence.mayHandOver}
           />
         ) : (

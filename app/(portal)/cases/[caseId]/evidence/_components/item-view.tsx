@@ -7,6 +7,7 @@ import type { ItemRow } from "@/lib/evidence/list-items";
 import { formatDate, formatDateTime } from "@/lib/format/dates";
 import { formatCount, formatQuantity } from "@/lib/format/numbers";
 import { CustodyChain } from "./custody-chain";
+import { DescribeItemDialog } from "./describe-item-dialog";
 import { HandOverDialog } from "./hand-over-dialog";
 
 type Props = {
@@ -15,11 +16,12 @@ type Props = {
   /** What it was cut from; null for what came in. */
   parentLabel: string | null;
   holders: { id: string; name: string }[];
+  mayDescribe: boolean;
   mayHandOver: boolean;
 };
 
 /** One item: what it is, where it is, and its chain of custody, newest first. */
-export function ItemView({ caseId, item, parentLabel, holders, mayHandOver }: Props) {
+export function ItemView({ caseId, item, parentLabel, holders, mayDescribe, mayHandOver }: Props) {
   const last = item.entries.at(-1);
   const { content } = item;
   return (
@@ -30,9 +32,10 @@ export function ItemView({ caseId, item, parentLabel, holders, mayHandOver }: Pr
           <h2 className="text-16 font-head">{content.name}</h2>
           <p className="text-13 text-ink-3">{kindLine(item, parentLabel)}</p>
         </div>
-        {mayHandOver && (
-          <div className="ml-auto">
-            <HandOverDialog caseId={caseId} item={item} holders={holders} />
+        {(mayDescribe || mayHandOver) && (
+          <div className="ml-auto flex gap-2">
+            {mayDescribe && <DescribeItemDialog key={item.version} caseId={caseId} item={item} />}
+            {mayHandOver && <HandOverDialog caseId={caseId} item={item} holders={holders} />}
           </div>
         )}
       </header>

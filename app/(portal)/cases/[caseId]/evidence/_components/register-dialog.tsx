@@ -6,13 +6,12 @@ import { fromLocalInput, toLocalInput } from "@/components/forms/local-time";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
-import { SelectField, TextAreaField, TextField } from "@/components/ui/labelled-fields";
+import { SelectField, TextField } from "@/components/ui/labelled-fields";
 import { Notice } from "@/components/ui/notice";
-import { CONDITION_WORDS, HAZARDS, ITEM_KIND_NAMES, ITEM_KINDS } from "@/lib/evidence/constants";
-import { oneNumber } from "@/lib/intake/one-number";
+import { ITEM_KIND_NAMES, ITEM_KINDS } from "@/lib/evidence/constants";
 import { routes } from "@/lib/routes";
 import { register } from "../actions";
-import { WordChoices } from "./word-choices";
+import { ItemFields, readItemFields } from "./item-fields";
 
 type Props = { caseId: string; items: { id: string; label: string; content: { name: string } }[] };
 
@@ -27,24 +26,17 @@ export function RegisterDialog({ caseId, items }: Props) {
 
   function send(data: FormData) {
     const text = (name: string) => String(data.get(name) ?? "");
-    const typedMass = text("massG").trim();
-    const mass = typedMass === "" ? null : oneNumber(typedMass, "g");
-    setMassProblem(mass && !mass.ok ? mass.says : null);
-    if (mass && !mass.ok) return;
+    const read = readItemFields(data);
+    setMassProblem(read.massProblem);
+    if (!read.content) return;
+    const { content } = read;
     form.send(
       () =>
         register({
           caseId,
           kind,
           parentId: isCut ? text("parentId") || null : null,
-          content: {
-            name: text("name"),
-            description: text("description"),
-            condition: CONDITION_WORDS.filter((word) => data.getAll("condition").includes(word)),
-            hazards: HAZARDS.filter((word) => data.getAll("hazards").includes(word)),
-            massG: mass?.value ?? null,
-            seal: text("seal"),
-          },
+          content,
           fromPlace: text("fromPlace"),
           toPlace: text("toPlace"),
           reason: text("reason"),
@@ -56,7 +48,7 @@ export function RegisterDialog({ caseId, items }: Props) {
       },
     );
   }
-  const error = (name: string) => form.fields[name] ?? form.fields[`content.${name}`];
+  const error = (name: string) => form.fields[name];
   return (
     <Dialog
       open={isOpen}
@@ -110,31 +102,12 @@ export function RegisterDialog({ caseId, items }: Props) {
             error={error("parentId")}
           />
         )}
-        <TextField
-          name="name"
-          label="What it is"
-          required
-          fieldClassName={isCut ? "sm:col-span-2" : undefined}
-          error={error("name")}
+        <ItemFields
+          content={null}
+          errors={form.fields}
+          massProblem={massProblem}
+          nameClassName={isCut ? "sm:col-span-2" : undefined}
         />
-        <TextAreaField
-          name="description"
-          label="Description"
-          optional
-          fieldClassName="sm:col-span-2"
-          error={error("description")}
-        />
-        <WordChoices name="condition" label="Condition" words={CONDITION_WORDS} />
-        <WordChoices name="hazards" label="Hazards" words={HAZARDS} />
-        <TextField
-          name="massG"
-          label="Mass"
-          unit="g"
-          optional
-          inputMode="decimal"
-          error={massProblem ?? error("massG")}
-        />
-        <TextField name="seal" label="Seal fitted" optional error={error("seal")} />
         <TextField
           name="fromPlace"
           label={isCut ? "Cut at" : "Came from"}
