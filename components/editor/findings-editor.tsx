@@ -92,7 +92,7 @@ export function FindingsEditor(props: FindingsEditorProps) {
     if (written) editor?.commands.insertContent(written);
   }
   const editor = useFindingsText({
-    document: props.document,
+    document: draft.opening,
     isReadOnly,
     onWrite: (document) => draft.write({ document }),
     onCite: openSearch,

@@ -1,7 +1,7 @@
 "use client";
 
 import { useCallback, useRef, useState } from "react";
-import { type KeptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
+import { type KeptDraft, newestDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
 import { useSetAside } from "@/components/forms/use-set-aside";
 import { routes } from "@/lib/routes";
 import { type Draft, parseDraft } from "./draft";
@@ -26,15 +26,23 @@ type Options = {
 export function useFindingsDraft(options: Options, show: (document: unknown) => void) {
   const { onSaved } = options;
   const storageKey = `riverline.findings.${options.caseId}.${options.issueNumber}`;
-  const [rootCause, setRootCause] = useState(options.rootCause);
+  const [start] = useState(() => {
+    const { revision, savedAt, document, rootCause } = options;
+    return newestDraft<Draft>(
+      storageKey,
+      { revision, savedAt, draft: { document, rootCause } },
+      parseDraft,
+    );
+  });
+  const [rootCause, setRootCause] = useState(start.draft.rootCause);
   // Counts changes since the last saved state; what stands beside the text follows it.
   const [changes, setChanges] = useState(0);
-  const draft = useRef<Draft>({ document: options.document, rootCause: options.rootCause });
+  const draft = useRef<Draft>(start.draft);
   const saving = useDraftSaving<Draft, SavedFindings>({
     url: routes.api.findings(options.caseId),
     storageKey,
-    revision: options.revision,
-    savedAt: options.savedAt,
+    revision: start.revision,
+    savedAt: start.savedAt,
     read: useCallback(() => draft.current, []),
     onSaved: useCallback(
       (saved: SavedFindings) => {
@@ -48,7 +56,7 @@ export function useFindingsDraft(options: Options, show: (document: unknown) => 
   const { aside, add, forget } = useSetAside<Draft>({
     storageKey,
     parse: parseDraft,
-    stored: { document: options.document, rootCause: options.rootCause },
+    stored: start.draft,
     isOff: options.isReadOnly,
   });
 
@@ -87,5 +95,16 @@ export function useFindingsDraft(options: Options, show: (document: unknown) => 
     saving.yieldTo(theirs.revision);
   }
 
-  return { rootCause, changes, saving, aside, forget, write, putBack, takeTheirs };
+  return {
+    /** The document to open the page with. */
+    opening: start.draft.document,
+    rootCause,
+    changes,
+    saving,
+    aside,
+    forget,
+    write,
+    putBack,
+    takeTheirs,
+  };
 }

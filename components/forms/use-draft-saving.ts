@@ -23,6 +23,26 @@ type Saved = { revision: number; savedAt: string };
 /** A draft as this device keeps it, and the revision it was written on. */
 export type KeptDraft<D> = { revision: number; at: string; draft: D };
 
+/** A draft as the server has it. */
+export type StoredDraft<D> = { revision: number; savedAt: string | null; draft: D };
+
+/** What this window saved since it was loaded, by storage key. */
+const savedHere = new Map<string, StoredDraft<unknown>>();
+
+/**
+ * The draft to start from: a page that comes back from the browser's history is as old as when it
+ * was left, and what was saved since is newer.
+ */
+export function newestDraft<D>(
+  storageKey: string,
+  loaded: StoredDraft<D>,
+  parse: (draft: unknown) => D | null,
+): StoredDraft<D> {
+  const own = savedHere.get(storageKey);
+  const draft = own && own.revision > loaded.revision ? parse(own.draft) : null;
+  return own && draft ? { ...own, draft } : loaded;
+}
+
 const SAVE_AFTER_MS = 1_500;
 const TRY_AGAIN_MS = 5_000;
 
@@ -66,7 +86,7 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
   }, []);
 
   const send = useCallback(async () => {
-    const [sent, chosen] = [typed.current, choice.current];
+    const [sent, chosen, draft] = [typed.current, choice.current, read()];
     setState((now) => (staysShown(now) ? now : { kind: "saving" }));
     const noAnswer = () => {
       setState({ kind: "offline" });
@@ -76,7 +96,7 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
       const answer = await fetch(url, {
         method: "PUT",
         headers: { "content-type": "application/json" },
-        body: JSON.stringify({ ...read(), revision: seen.current }),
+        body: JSON.stringify({ ...draft, revision: seen.current }),
       });
       const body = await answer.json();
       isSignedOut.current = answer.status === 401;
@@ -85,6 +105,7 @@ export function useDraftSaving<D extends object, S extends Saved>(options: {
         const saved: S = body;
         goOnFrom(saved.revision);
         stored.current = sent;
+        savedHere.set(storageKey, { revision: saved.revision, savedAt: saved.savedAt, draft });
         onSaved?.(saved);
         if (typed.current === sent) {
           dropFromDevice(storageKey);

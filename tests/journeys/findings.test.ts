@@ -36,13 +36,17 @@ async function cursorAfter(page: Page, words: string | RegExp): Promise<void> {
 
 const saved = (page: Page) => page.getByText(/^Saved \d/).waitFor();
 /** Does something, and waits until the server has the text that comes of it. */
-async function andSaved(page: Page, work: () => Promise<void>): Promise<void> {
+async function andSaved(
+  page: Page,
+  work: () => Promise<void>,
+  then: "here" | "elsewhere" = "here",
+): Promise<void> {
   const answer = page.waitForResponse(
     (response) => response.request().method() === "PUT" && response.status() === 200,
   );
   await work();
   await answer;
-  await saved(page);
+  if (then === "here") await saved(page);
 }
 const reload = async (page: Page) => {
   await page.reload();
@@ -146,6 +150,26 @@ it("shows two writers both texts, and loses neither whichever is taken", async (
   expect(second.faults.filter((fault) => !fault.includes("409"))).toEqual([]);
   await first.page.context().close();
   await mine.context().close();
+});
+
+it("shows what was written last after going on and coming back, and saves on from there", async () => {
+  const { page, faults } = await openFindings(WRITER);
+  await cursorAfter(page, "Why the shaft broke");
+  await andSaved(
+    page,
+    async () => {
+      await page.keyboard.type(" Written before going on.");
+      await page.getByRole("link", { name: /^Weighing/ }).click();
+      await page.getByRole("heading", { name: "Weighing" }).waitFor();
+    },
+    "elsewhere",
+  );
+  await page.goBack();
+  await text(page).getByText("Written before going on.").waitFor();
+  await cursorAfter(page, "Written before going on.");
+  await andSaved(page, () => page.keyboard.type(" Written after."));
+  expect(faults).toEqual([]);
+  await page.context().close();
 });
 
 it("goes on without a connection and sends what was written when it is back", async () => {

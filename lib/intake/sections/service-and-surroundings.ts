@@ -2,7 +2,7 @@ import type { SectionDefinition } from "../field-types";
 
 export const SERVICE_AND_SURROUNDINGS = {
   key: "service",
-  title: "Service and surroundings",
+  title: "Service conditions",
   note: "How it was loaded, kept and looked after",
   groups: [
     {

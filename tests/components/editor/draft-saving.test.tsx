@@ -1,7 +1,7 @@
 import { act, cleanup, renderHook } from "@testing-library/react";
 import { afterEach, beforeEach, describe, expect, test, vi } from "vitest";
 import { readFromDevice } from "@/components/forms/device-copy";
-import { useDraftSaving } from "@/components/forms/use-draft-saving";
+import { newestDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
 
 type Draft = { document: string; rootCause: string };
 type Answer = { status: number; body: unknown } | "no connection";
@@ -156,6 +156,25 @@ describe("saving as one types", () => {
     await pass(1_600);
     expect(page.state()).toBe("offline");
     expect(readFromDevice(KEY)).toMatchObject({ draft: { document: "one" } });
+  });
+
+  test("a page that comes back older from the browser's history starts from what was saved since", async () => {
+    answers = [saved(2)];
+    const page = open();
+    page.type("one two");
+    await pass(1_600);
+    const parse = (kept: unknown) =>
+      typeof kept === "object" && kept !== null && "document" in kept
+        ? { document: String(kept.document), rootCause: "" }
+        : null;
+    const old = { revision: 1, savedAt: null, draft: { document: "one", rootCause: "" } };
+    expect(newestDraft(KEY, old, parse)).toMatchObject({
+      revision: 2,
+      draft: { document: "one two" },
+    });
+    const newer = { ...old, revision: 3 };
+    expect(newestDraft(KEY, newer, parse)).toBe(newer);
+    expect(newestDraft("riverline.another", old, parse)).toBe(old);
   });
 
   test("sends what was typed last when one goes on to another page", async () => {

@@ -5,10 +5,10 @@ import { keepOnDevice, readFromDevice } from "@/components/forms/device-copy";
 import type { Answers } from "@/lib/intake/answers";
 import type { FieldReturnPage } from "@/lib/intake/read-field-return";
 
-const KEY = "riverline.field-return.case_1";
 const heat = (value: string): Answers => ({ heatNumber: { kind: "value", value } });
-const PAGE: FieldReturnPage = {
-  caseId: "case_1",
+/** Each test has a case of its own: what a window saved, it remembers. */
+const aPage = (caseId: string): FieldReturnPage => ({
+  caseId,
   number: null,
   state: "draft",
   client: "Harrow Bay Lifting Gear",
@@ -21,13 +21,14 @@ const PAGE: FieldReturnPage = {
   files: [],
   questions: [],
   earlier: [],
-};
+});
+const keyOf = (caseId: string) => `riverline.field-return.${caseId}`;
 
 let sent: { revision: number; answers: Answers }[];
 beforeEach(() => {
   localStorage.clear();
   sent = [];
-  let stored = { revision: 5, answers: PAGE.answers };
+  let stored = { revision: 5, answers: heat("7K3392") };
   vi.stubGlobal("fetch", (_url: string, init: { body: string }) => {
     const draft: { revision: number; answers: Answers } = JSON.parse(init.body);
     sent.push(draft);
@@ -49,9 +50,13 @@ afterEach(() => {
   vi.unstubAllGlobals();
 });
 
-async function openWithKept(revision: number) {
-  keepOnDevice(KEY, { revision, at: "2026-12-01T10:00:00Z", draft: { answers: heat("7K3391") } });
-  const { result } = renderHook(() => useAnswers(PAGE));
+async function openWithKept(caseId: string, revision: number) {
+  keepOnDevice(keyOf(caseId), {
+    revision,
+    at: "2026-12-01T10:00:00Z",
+    draft: { answers: heat("7K3391") },
+  });
+  const { result } = renderHook(() => useAnswers(aPage(caseId)));
   await waitFor(() => expect(result.current.aside).toHaveLength(1));
   const [kept] = result.current.aside;
   if (!kept) throw new Error("nothing was kept");
@@ -61,7 +66,7 @@ async function openWithKept(revision: number) {
 }
 
 test("answers put back go on from what they were written on", async () => {
-  const page = await openWithKept(5);
+  const page = await openWithKept("case_1", 5);
   await waitFor(() => expect(sent).toEqual([{ revision: 5, answers: heat("7K3391") }]));
   expect(page.current.saving.state.kind).toBe("saved");
   expect(page.current.answers).toEqual(heat("7K3391"));
@@ -69,7 +74,7 @@ test("answers put back go on from what they were written on", async () => {
 });
 
 test("answers put back do not write over newer ones: both are shown, and nothing was saved", async () => {
-  const page = await openWithKept(3);
+  const page = await openWithKept("case_2", 3);
   expect(sent).toEqual([{ revision: 3, answers: heat("7K3391") }]);
   expect(page.current.saving.state).toMatchObject({
     kind: "conflict",
@@ -81,15 +86,17 @@ test("answers put back do not write over newer ones: both are shown, and nothing
 });
 
 test("taking the newer ones keeps one's own on the device", async () => {
-  const page = await openWithKept(3);
+  const page = await openWithKept("case_3", 3);
   act(() => page.current.takeTheirs());
   expect(page.current.answers).toEqual(heat("7K3392"));
   expect(page.current.aside).toMatchObject([{ draft: { answers: heat("7K3391") } }]);
-  expect(readFromDevice(`${KEY}.aside`)).toMatchObject([{ draft: { answers: heat("7K3391") } }]);
+  expect(readFromDevice(`${keyOf("case_3")}.aside`)).toMatchObject([
+    { draft: { answers: heat("7K3391") } },
+  ]);
 });
 
 test("keeping one's own writes them over the newer ones", async () => {
-  const page = await openWithKept(3);
+  const page = await openWithKept("case_4", 3);
   act(() => page.current.saving.overrule(5));
   await waitFor(() => expect(page.current.saving.state.kind).toBe("saved"));
   expect(sent.at(-1)).toEqual({ revision: 5, answers: heat("7K3391") });

@@ -93,7 +93,7 @@ export default async function SignOffPage({ params }: { params: Promise<{ caseId
                     <NewIssueDialog caseId={caseId} nextNumber={issue.number + 1} />
                   )}
                 </div>
-                <Notice kind="note" title="Before you sign">
+                <Notice kind="note" title="Before you sign.">
                   Findings rest on the pieces examined. They are no release for service and no
                   fitness-for-service statement. Where law asks for a licensed engineer, only that
                   person may approve.

@@ -1,7 +1,7 @@
 "use client";
 
 import { useCallback, useRef, useState } from "react";
-import { type KeptDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
+import { type KeptDraft, newestDraft, useDraftSaving } from "@/components/forms/use-draft-saving";
 import { useSetAside } from "@/components/forms/use-set-aside";
 import type { Answer, Answers } from "@/lib/intake/answers";
 import { checkAnswer, checkForSending, type Problems } from "@/lib/intake/check-answers";
@@ -20,16 +20,20 @@ function parseDraft(kept: unknown): Draft | null {
 /** Answers as they stand on this page, what is wrong with them, and how far they are saved. */
 export function useAnswers(page: FieldReturnPage) {
   const storageKey = `riverline.field-return.${page.caseId}`;
-  const [answers, setAnswers] = useState(page.answers);
+  const [start] = useState(() => {
+    const { revision, savedAt, answers } = page;
+    return newestDraft<Draft>(storageKey, { revision, savedAt, draft: { answers } }, parseDraft);
+  });
+  const [answers, setAnswers] = useState(start.draft.answers);
   const [problems, setProblems] = useState<Problems>({});
   // Counts changes since the last saved state.
   const [changes, setChanges] = useState(0);
-  const draft = useRef<Draft>({ answers: page.answers });
+  const draft = useRef<Draft>(start.draft);
   const saving = useDraftSaving<Draft, { revision: number; savedAt: string }>({
     url: routes.api.fieldReturnDraft(page.caseId),
     storageKey,
-    revision: page.revision,
-    savedAt: page.savedAt,
+    revision: start.revision,
+    savedAt: start.savedAt,
     read: useCallback(() => draft.current, []),
     onSaved: useCallback(() => setChanges(0), []),
   });
@@ -37,7 +41,7 @@ export function useAnswers(page: FieldReturnPage) {
   const { aside, add, forget } = useSetAside<Draft>({
     storageKey,
     parse: parseDraft,
-    stored: { answers: page.answers },
+    stored: start.draft,
   });
 
   const replace = useCallback((next: Answers) => {

@@ -3,11 +3,13 @@
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Button } from "@/components/ui/button";
 import { SelectField, TextAreaField } from "@/components/ui/labelled-fields";
+import { LinkButton } from "@/components/ui/link-button";
 import { Notice } from "@/components/ui/notice";
 import { Panel, PanelBody, PanelHead } from "@/components/ui/panel";
 import { RadioGroup } from "@/components/ui/radio-group";
 import { formatDateTime } from "@/lib/format/dates";
 import type { SignOffPage } from "@/lib/reports/read-sign-off";
+import { routes } from "@/lib/routes";
 import { saveReading, sendToReader } from "../actions";
 
 /** Who reads the findings as second reader, and what came of it. */
@@ -105,6 +107,12 @@ function ReadingForm({ caseId, revision }: { caseId: string; revision: number })
           {form.failure}
         </Notice>
       )}
+      <p className="flex flex-wrap items-center justify-between gap-2 text-13 text-ink-2">
+        Read the text and leave notes beside it; the author answers each before it is signed.
+        <LinkButton small href={routes.findings(caseId)}>
+          Read the findings
+        </LinkButton>
+      </p>
       <RadioGroup
         name="verdict"
         label="Your reading"
