@@ -158,13 +158,13 @@ function Handle(props: {
     >
       <circle cx={x} cy={y} r={12} fill="transparent" className="pointer-coarse:[r:22px]" />
       <rect
-        x={x - 7}
-        y={y - 7}
-        width={14}
-        height={14}
+        x={x - 5}
+        y={y - 5}
+        width={10}
+        height={10}
         fill={props.isChosen ? "#fff" : "#000"}
         stroke={props.isChosen ? "#000" : "#fff"}
-        strokeWidth={2}
+        strokeWidth={1.6}
       />
     </g>
   );

@@ -72,6 +72,20 @@ export function MarkPoints({ geometry, view }: { geometry: Geometry; view: View 
             </>
           ) : null}
           <circle cx={x} cy={y} r="3.2" fill={hue} stroke="#000" strokeWidth="1.5" />
+          {i === 1 ? (
+            <text
+              x={x}
+              y={y - 9}
+              textAnchor="middle"
+              fontSize="12"
+              fill={hue}
+              stroke="#000"
+              strokeWidth="3"
+              paintOrder="stroke"
+            >
+              {geometry.landmark?.name}
+            </text>
+          ) : null}
         </g>
       ));
     case "note":

@@ -104,7 +104,7 @@ export function MarksPanel(props: Props) {
       )}
       {deleted.length > 0 && (
         <details className="border-t border-ib-rule px-3.5 py-2 text-12">
-          <summary className="min-h-6">{deleted.length} deleted</summary>
+          <summary className="min-h-6 pointer-coarse:py-3">{deleted.length} deleted</summary>
           <ul>
             {deleted.map((mark) => (
               <li key={mark.id} className="flex min-h-8 items-center justify-between gap-2">

@@ -36,6 +36,7 @@ export function ScaleForm({
   const [known, setKnown] = useState("");
   const [uncertainty, setUncertainty] = useState("");
   const [percent, setPercent] = useState("2");
+  const [tilt, setTilt] = useState("");
   const [problem, setProblem] = useState<string | null>(null);
   const [first, second] = points;
 
@@ -46,10 +47,12 @@ export function ScaleForm({
       return number.ok ? number.value : null;
     };
     setProblem(null);
+    const tiltDeg = tilt.trim() === "" ? null : read(tilt, "°");
+    if (tilt.trim() !== "" && tiltDeg === null) return;
     if (source === "file_resolution") {
       const relativeUncertaintyPercent = read(percent, "%");
       if (relativeUncertaintyPercent !== null)
-        onSet({ imageId, seenVersion, source, relativeUncertaintyPercent });
+        onSet({ imageId, seenVersion, source, relativeUncertaintyPercent, tiltDeg });
       return;
     }
     const knownDistanceMm = read(known, "mm");
@@ -67,6 +70,7 @@ export function ScaleForm({
       ],
       knownDistanceMm,
       knownDistanceUncertaintyMm,
+      tiltDeg,
     });
   }
 
@@ -133,6 +137,15 @@ export function ScaleForm({
           />
         </>
       )}
+      <BenchInput
+        id="scale-tilt"
+        label="Tilt of the face"
+        unit="°"
+        numeric
+        hint="Optional. Against the plane of the picture. Lengths are not corrected for it."
+        value={tilt}
+        onChange={setTilt}
+      />
       {seenVersion !== null && markCount > 0 && (
         <p className="text-ib-origin">
           Values of {markCount} marks are worked out anew. Texts that cite them show as stale.

@@ -1,8 +1,17 @@
 import type { BenchScale } from "@/lib/images/bench-state";
 import { formatDate } from "@/lib/format/dates";
+import { formatQuantity } from "@/lib/format/numbers";
+import { tiltShortfall } from "@/lib/imaging/uncertainty";
 import { BENCH_LINK, BENCH_PANEL } from "./bench-look";
 
 type Props = { scale: BenchScale | null; mayScale: boolean; onScale: () => void };
+
+function tiltText(tiltDeg: number | null): string {
+  if (tiltDeg === null) return "not stated, not corrected";
+  if (tiltDeg === 0) return "0°";
+  const short = formatQuantity(100 * tiltShortfall(tiltDeg), "%", { figures: 2 });
+  return `${tiltDeg}°, not corrected: lengths across it read ${short} short`;
+}
 
 /** Where the scale is from, how sure it is, who set it and when. */
 export function ScalePanel({ scale, mayScale, onScale }: Props) {
@@ -18,12 +27,7 @@ export function ScalePanel({ scale, mayScale, onScale }: Props) {
           ],
           ["Pixel", scale.pixelText],
           ["Set by", `${scale.by}, ${formatDate(scale.at)}`],
-          [
-            "Tilt",
-            settings.tiltDeg === null
-              ? "not stated, not corrected"
-              : `${settings.tiltDeg}°, not corrected`,
-          ],
+          ["Tilt", tiltText(settings.tiltDeg)],
         ]
       : [];
   return (

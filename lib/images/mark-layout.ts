@@ -34,6 +34,10 @@ export function midpointOf(points: readonly Point[], along = 0.5): Point {
   return points[0] ?? [0, 0];
 }
 
+function topOf(points: readonly Point[]): Point {
+  return points.reduce<Point>((top, point) => (point[1] < top[1] ? point : top), [0, Infinity]);
+}
+
 export type LabelPlace = {
   /** In image pixels. */
   at: Point;
@@ -56,10 +60,10 @@ export function labelPlace(geometry: Geometry): LabelPlace {
     case "length":
       return { at: midpointOf(geometry.points), side: "over" };
     case "area":
-      return {
-        at: polygonCentroid(geometry.points) ?? midpointOf(geometry.points),
-        side: geometry.isOutline ? "above" : "over",
-      };
+      // The outline holds all else, so its label keeps outside, at its top.
+      return geometry.isOutline
+        ? { at: topOf(geometry.points), side: "above" }
+        : { at: polygonCentroid(geometry.points) ?? midpointOf(geometry.points), side: "over" };
     case "angle":
       return { at: geometry.points[1], side: "below" };
     case "count":

@@ -8,6 +8,7 @@ import { getCase } from "@/lib/cases/get-case";
 import { notFound } from "@/lib/errors";
 import type { BenchMark, BenchPicture, BenchScale, BenchState, FilmPicture } from "./bench-state";
 import { markLabel } from "./mark-label";
+import { MARK_TOOLS } from "./constants";
 import { caseOfImage } from "./open-image";
 import { pictureFacts } from "./picture-facts";
 import { readPictureMarks, type StoredMark, type StoredScale } from "./picture-marks";
@@ -48,7 +49,10 @@ export async function getBenchState(actor: Actor, imageId: string): Promise<Benc
     .innerJoin(records, eq(records.id, images.recordId))
     .where(eq(images.recordId, imageId));
   if (!image) throw notFound();
-  const { scale, marks } = await readPictureMarks(reader, imageId);
+  const { scale, marks: unsorted } = await readPictureMarks(reader, imageId);
+  // Kinds together, from the origin outward; within a kind in the order they were made.
+  const kind = (mark: StoredMark) => MARK_TOOLS.indexOf(mark.content.tool);
+  const marks = unsorted.toSorted((a, b) => kind(a) - kind(b));
   const withdrawn =
     image.recordState === "void"
       ? `This picture was withdrawn${image.voidReason ? `: ${image.voidReason}` : ""}.`

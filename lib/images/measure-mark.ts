@@ -28,7 +28,7 @@ export type MeasuringGround = {
   outline: { label: string; points: readonly Point[] } | null;
   origin: { label: string; point: Point } | null;
 };
-export const MEASURING_METHOD = { name: "Marks on pictures", version: "1" } as const;
+export const MEASURING_METHOD = { name: "Marks on pictures", version: "2" } as const;
 
 const PICK_PX = USUAL_PICK_UNCERTAINTY_PX / COVERAGE_FACTOR;
 const TWO_ENDS_PX = Math.SQRT2 * PICK_PX;
@@ -118,7 +118,7 @@ export function measureMark(geometry: Geometry, ground: MeasuringGround): Measur
 function rimOf(ground: MeasuringGround): Circle | string {
   if (!ground.outline) return NO_OUTLINE;
   const circle = circleThrough(ground.outline.points);
-  return circle && isRound(circle) ? circle : NOT_ROUND;
+  return circle && isRound(circle, ground.outline.points) ? circle : NOT_ROUND;
 }
 
 function clockAngle(geometry: GeometryOf<"origin">, ground: MeasuringGround): Measurement {

@@ -45,9 +45,25 @@ export function circleThrough(points: readonly Point[]): Circle | null {
   return { centre, radiusPx, residualPx: Math.sqrt(squares / count) };
 }
 
-/** An outline counts as round when it keeps within this share of its radius (own choice). */
-const ROUND_WITHIN = 0.03;
+/** Shares of the radius within which an outline counts as round (own choice). */
+const CORNERS_WITHIN = 0.03;
+/** A polygon of seven sides leaves 1 - cos(180°/7) = 9.9 %, a hexagonal bar 13 %, a square one 29 %. */
+const SIDES_WITHIN = 0.1;
 
-export function isRound({ radiusPx, residualPx }: Circle): boolean {
-  return residualPx <= ROUND_WITHIN * radiusPx;
+/**
+ * Whether an outline is round, `circle` being the one through its corners. The corners alone do not
+ * say: those of a square lie on a circle too, so the middles of the sides are looked at as well.
+ */
+export function isRound(
+  { centre, radiusPx, residualPx }: Circle,
+  outline: readonly Point[],
+): boolean {
+  return (
+    residualPx <= CORNERS_WITHIN * radiusPx &&
+    outline.every(([x, y], i) => {
+      const [nextX, nextY] = outline[(i + 1) % outline.length] ?? [x, y];
+      const middle: Point = [(x + nextX) / 2, (y + nextY) / 2];
+      return radiusPx - distancePx(middle, centre) <= SIDES_WITHIN * radiusPx;
+    })
+  );
 }

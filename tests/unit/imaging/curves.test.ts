@@ -75,21 +75,50 @@ describe("a circle through points", () => {
     ).toBeNull();
   });
 
+  const corners = (count: number) =>
+    onCircle(
+      [500, 500],
+      100,
+      Array.from({ length: count }, (_, i) => (360 * i) / count),
+    );
+  const round = (outline: readonly Point[]) => {
+    const circle = circleThrough(outline);
+    return circle !== null && isRound(circle, outline);
+  };
+
   it("is called round within three per cent of its radius", () => {
-    const circle = { centre: [0, 0] as const, radiusPx: 100 };
-    expect(isRound({ ...circle, residualPx: 3 })).toBe(true);
-    expect(isRound({ ...circle, residualPx: 3.01 })).toBe(false);
-    const square = circleThrough([
-      [0, 0],
-      [50, 0],
-      [100, 0],
-      [100, 50],
-      [100, 100],
-      [50, 100],
-      [0, 100],
-      [0, 50],
+    const circle = { centre: [500, 500] as const, radiusPx: 100 };
+    expect(isRound({ ...circle, residualPx: 3 }, corners(36))).toBe(true);
+    expect(isRound({ ...circle, residualPx: 3.01 }, corners(36))).toBe(false);
+  });
+
+  it("is not called round for the corners of a square or a hexagon, which lie on one", () => {
+    const square = corners(4);
+    expect(circleThrough(square)?.residualPx).toBeCloseTo(0, 8);
+    expect([3, 4, 5, 6, 7, 8, 12, 120].map((count) => round(corners(count)))).toEqual([
+      false,
+      false,
+      false,
+      false,
+      true,
+      true,
+      true,
+      true,
     ]);
-    expect(square && isRound(square)).toBe(false);
+    const bar: Point[] = [
+      [0, 0],
+      [300, 0],
+      [300, 100],
+      [0, 100],
+    ];
+    expect(round(bar)).toBe(false);
+  });
+
+  it("is not called round with a flat cut off it", () => {
+    // A segment of 60 degrees gone: its chord lies 1 - cos(30°) = 13 % inside.
+    const cut = corners(36).filter((_, i) => i === 0 || i >= 6);
+    expect(round(cut)).toBe(false);
+    expect(round(corners(36).filter((_, i) => i === 0 || i >= 4))).toBe(true);
   });
 });
 
