@@ -9,6 +9,18 @@ const assigned = (actor: Actor) =>
     or ${cases.secondReaderId} = ${actor.id} or ${cases.requesterId} = ${actor.id}
     or exists (select 1 from case_technicians ct where ct.case_id = ${cases.id} and ct.person_id = ${actor.id}))`;
 
+/**
+ * `assigned` found from the person's side, through an index each, for who sees nothing else: as a
+ * condition on each row it would be asked of every case there is.
+ */
+const ofAssigned = (actor: Actor) =>
+  sql`${cases.id} in (select of_person.id from (
+    select c.id from cases c where c.investigator_id = ${actor.id}
+    union select c.id from cases c where c.lead_id = ${actor.id}
+    union select c.id from cases c where c.second_reader_id = ${actor.id}
+    union select c.id from cases c where c.requester_id = ${actor.id}
+    union select ct.case_id from case_technicians ct where ct.person_id = ${actor.id}) of_person)`;
+
 /** The policy's "case.view" as a condition on rows, so that lists show what pages would open. */
 export function visibleCases(actor: Actor): SQL {
   const roles: Partial<Record<string, Relation>> = POLICY["case.view"].roles;
@@ -25,7 +37,7 @@ export function visibleCases(actor: Actor): SQL {
       // Their own drafts are of their own organisation, so one indexed condition is enough.
       return and(eq(cases.organisationId, actor.organisationId), or(sent, own)) ?? sql`false`;
     case "assigned":
-      return assigned(actor);
+      return ofAssigned(actor);
     case "any":
       return seesRestricted(actor)
         ? (or(own, sent) ?? sql`false`)
