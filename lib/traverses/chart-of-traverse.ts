@@ -3,6 +3,7 @@ import type { HardnessProfileInput, ProfileSeries } from "@/lib/charts/hardness-
 import type { Chart } from "@/lib/charts/primitives";
 import { formatNumber, formatRange, formatWithUncertainty } from "@/lib/format/numbers";
 import { converterFor } from "@/lib/hardness/convert";
+import { SHD_FRACTION } from "@/lib/hardness/depth-limits";
 import { ALL_TABLE_IDS } from "@/lib/hardness/published-tables";
 import { SCALES } from "@/lib/hardness/scales";
 import { conversionColumns, measuredScale } from "./conversion-columns";
@@ -19,6 +20,9 @@ type ChartShape = {
 const SIZE = { widthPx: 640, heightPx: 344 };
 const MOST_SERIES = 3;
 const TICK_STEP = 5;
+/** How many times its own depth a profile is stretched at most to show another behind it. */
+const REACH = 1.5;
+const SHD_PERCENT = Math.round(SHD_FRACTION * 100);
 
 function seriesOf({ label, content, result }: ShownTraverse): ProfileSeries {
   const flagged = new Set(
@@ -85,19 +89,27 @@ function limitText(result: ResultContent, content: TraverseContent): string {
   const value = `limit ${formatNumber(depth.limit, { decimals: 0 })} ${symbol}`;
   const isShare = depth.kind === "SHD" && content.agreedLimit === null;
   if (isShare && content.minSurfaceHv !== null)
-    return `${value} = 80 % of ${formatNumber(content.minSurfaceHv)}`;
+    return `${value} = ${SHD_PERCENT} % of ${formatNumber(content.minSurfaceHv)}`;
   return content.agreedLimit === null ? value : `${value}, agreed`;
+}
+
+const depthsOf = ({ readings }: ResultContent): number[] =>
+  readings.flatMap(({ depthMm }) => (depthMm === null ? [] : [depthMm]));
+
+/** Another that begins far beyond this one's deepest indent would only press its profile together. */
+function beginsWithin(other: ResultContent, deepestMm: number): boolean {
+  return deepestMm === 0 || depthsOf(other).some((depthMm) => depthMm <= REACH * deepestMm);
 }
 
 /** The profile of one traverse as the chart takes it, on the screen, in the findings and on paper. */
 export function profileInputOf(shown: ShownTraverse, shape: ChartShape = {}): HardnessProfileInput {
   const { content, result } = shown;
   const { depth, symbol } = result;
+  const deepest = Math.max(0, ...depthsOf(result));
   const others = (shape.others ?? [])
-    .filter((other) => other.result.symbol === symbol)
+    .filter((other) => other.result.symbol === symbol && beginsWithin(other.result, deepest))
     .slice(0, MOST_SERIES - 1);
   const { min, max } = content.requiredDepthMm ?? { min: null, max: null };
-  const deepest = Math.max(0, ...result.readings.map(({ depthMm }) => depthMm ?? 0));
   const scale = convertedScale(content);
   const [tableLabel = ""] = result.tableTitles;
   return {
