@@ -3,9 +3,6 @@ import { z } from "zod";
 const cursor = z.tuple([z.union([z.string(), z.number(), z.null()]), z.string()]);
 export type Cursor = z.infer<typeof cursor>;
 
-/** Longest place in an address: a title of 200 control characters, as JSON in Base64. */
-export const CURSOR_MAX = 2000;
-
 /** Place in a list: the sort value and id of the last row seen; null where the row has no value. */
 export function encodeCursor(value: Cursor): string {
   const bytes = new TextEncoder().encode(JSON.stringify(value));
