@@ -85,5 +85,5 @@ describe("a worker that is killed", () => {
     }
     const told = await database().select().from(auditEvents).where(eq(auditEvents.chain, caseId));
     expect(told.filter((event) => event.action === "system.takeInImage")).toHaveLength(1);
-  });
+  }, 120_000);
 });
